@@ -1,0 +1,15 @@
+package stillwarden.describe;
+
+/** One opening of a part, {@code claisen.foot}; a part with a single port may be named alone. */
+public record Port(String part, String port) implements Comparable<Port> {
+  @Override
+  public int compareTo(Port o) {
+    int c = part.compareTo(o.part);
+    return c != 0 ? c : port.compareTo(o.port);
+  }
+
+  @Override
+  public String toString() {
+    return port.isEmpty() ? part : part + "." + port;
+  }
+}
