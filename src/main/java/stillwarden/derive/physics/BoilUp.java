@@ -81,12 +81,12 @@ record BoilUp(Band kilograms, Band cubicMetres, double waterShare, double latent
   /** Flask readings as water gone: less what was fed since. */
   private static List<RunState.Amount> boiledAway(RunState run) {
     return run.flaskReadings().stream()
-        .map(r -> new RunState.Amount(r.at(), run.fed() - run.fedSince(r.at()) - r.volume())).toList();
+        .map(r -> new RunState.Amount(r.at(), run.fed() - run.fedSince(r.at()) - r.si())).toList();
   }
 
   static Optional<Band> slope(List<RunState.Amount> readings, Instant from) {
     SimpleRegression line = new SimpleRegression();
-    readings.stream().filter(r -> !r.at().isBefore(from)).forEach(r -> line.addData((r.at().toEpochMilli() - from.toEpochMilli()) / 1000.0, r.volume()));
+    readings.stream().filter(r -> !r.at().isBefore(from)).forEach(r -> line.addData((r.at().toEpochMilli() - from.toEpochMilli()) / 1000.0, r.si()));
     if (line.getN() < Limits.value("fit-points-min") || line.getXSumSquares() <= 0 || !(line.getSlope() > 0)) {
       return Optional.empty();
     }

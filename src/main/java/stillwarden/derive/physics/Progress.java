@@ -61,6 +61,13 @@ record Progress(
     if (b.run.boilingSince().isPresent()) {
       return Optional.of(Band.of(0));
     }
+    if (b.run.flaskTemperature().isPresent() && b.boiling() > b.room) {
+      // a temperature read on the way up says more than the clock
+      RunState.Amount read = b.run.flaskTemperature().get();
+      double left = Math.max(0, (b.boiling() - read.si()) / (b.boiling() - b.room));
+      double since = b.run.secondsSince(read.at());
+      return heatUp.map(h -> h.times(left).minus(Band.of(since)).atLeast(0));
+    }
     double gone = b.run.heatSince().map(b.run::secondsSince).orElse(0.0);
     return heatUp.map(h -> h.minus(Band.of(gone)).atLeast(0));
   }
@@ -133,7 +140,7 @@ record Progress(
     if (!readings.isEmpty()) {
       RunState.Amount last = readings.get(readings.size() - 1);
       double seconds = boiledSince(b, boils, last.at());
-      Band seen = Band.of(last.volume());
+      Band seen = Band.of(last.si());
       return Optional.of(rate.map(r -> seen.plus(r.cubicMetres().times(seconds))).orElse(seen));
     }
     Instant from = b.run.heatSince().orElse(b.run.at());

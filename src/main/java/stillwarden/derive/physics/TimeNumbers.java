@@ -89,12 +89,18 @@ final class TimeNumbers {
     if (left.isEmpty()) {
       left = b.rig.si("target.oil").flatMap(this::forOil);
     }
+    Optional<Double> planned = b.rig.si("target.time");
+    if (left.isEmpty() && planned.isPresent()) {
+      double gone = b.run.heatSince().map(b.run::secondsSince).orElse(0.0);
+      out.put("time-to-target", Band.of(Math.max(0, planned.get() - gone)), "planned time less time since heat-on", "the rig file", List.of());
+      return;
+    }
     time("time-to-target", left, "what is still to come over", "target.distillate", "target.oil");
   }
 
   /** m3 of distillate that bring a mass of oil. */
   private Optional<Band> forOil(double kilograms) {
-    if (b.course.isEmpty() || b.charge.oilMass().isEmpty() || now.collected().isEmpty()) {
+    if (b.course.isEmpty() || !b.charge.oilAmountKnown() || now.collected().isEmpty()) {
       return Optional.empty();
     }
     double share = kilograms / b.charge.oilMass().get().nominal();
