@@ -77,7 +77,7 @@ final class CoolantNumbers {
       out.absent(name, String.format(Locale.ROOT, "from %.0f %% of the oil over; rate or amount of oil not known, or heat off: no time", watch.get() * 100), "charge.oil.expected", "mantle.power");
       return;
     }
-    double ideal = b.course.get().atShare(watch.get()).water() / 997;
+    double ideal = b.course.get().atShare(watch.get()).water() / WaterSteam.COLD_DENSITY;
     Band slower = b.diffusion();
     Band volume = new Band(ideal, ideal * slower.nominal(), ideal * slower.high());
     Band left = volume.minus(now.collected().orElse(Band.of(0))).atLeast(0);

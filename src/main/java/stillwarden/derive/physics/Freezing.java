@@ -42,7 +42,7 @@ record Freezing(Optional<Band> whole, Optional<Band> now, Optional<Band> highest
   }
 
   private static Optional<Band> now(Bench b, Fractionation run, Progress progress) {
-    double water = progress.collected().map(c -> c.nominal() * 997).orElse(0.0);
+    double water = progress.collected().map(c -> c.nominal() * WaterSteam.COLD_DENSITY).orElse(0.0);
     Band slower = b.diffusion();
     Optional<Band> nominal = at(run, run.atWater(water / slower.nominal()));
     Optional<Band> early = at(run, run.atWater(water / slower.high()));

@@ -60,7 +60,7 @@ public final class Physics {
       for (RunState.Amount f : b.run.feeds()) {
         // what an earlier feed still owes is added to the next one's debt
         Instant start = until.isAfter(f.at()) ? until : f.at();
-        until = start.plusMillis((long) (1000 * ClosedVessel.reboil(f.si() * 998, from, b.boiling(), net)));
+        until = start.plusMillis((long) (1000 * ClosedVessel.reboil(f.si() * WaterSteam.COLD_DENSITY, from, b.boiling(), net)));
         stops = Duration.between(f.at(), until).toSeconds() > Limits.value("feed-stops-after");
       }
       return Optional.of(new Feed(until, stops));

@@ -57,7 +57,7 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
       List<End> ends = new ArrayList<>();
       b.rig.si("target.distillate").ifPresent(v -> ends.add(end("target", v)));
       if (b.course.filter(Fractionation::complete).isPresent() && b.charge.oilAmountKnown()) {
-        ends.add(end("oil-over", b.course.get().waterForAll() * b.diffusion().nominal() / 997));
+        ends.add(end("oil-over", b.course.get().waterForAll() * b.diffusion().nominal() / WaterSteam.COLD_DENSITY));
       }
       if (reservoir > 0) {
         ends.add(end("reservoir", reservoir / rate.waterShare()));
@@ -123,7 +123,7 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
 
     /** kg of water as it would be in an ideal run. */
     private Band over(double s) {
-      return volume(s).times(997 * rate.waterShare()).over(b.diffusion());
+      return volume(s).times(WaterSteam.COLD_DENSITY * rate.waterShare()).over(b.diffusion());
     }
 
     private double flask(double boiled) {

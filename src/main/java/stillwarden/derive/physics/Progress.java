@@ -45,7 +45,7 @@ record Progress(
     if (into.nominal() <= 0) {
       return Optional.empty();
     }
-    Band slow = new Band(Math.max(into.low(), into.nominal() * 0.2), into.nominal(), into.high());
+    Band slow = new Band(Math.max(into.low(), into.nominal() * BoilUp.slowest()), into.nominal(), into.high());
     return Optional.of(Heat.capacity(b.charge, b.charge.water().get(), b.volume).times(Math.max(0, b.boiling() - b.room)).over(slow));
   }
 
@@ -160,12 +160,12 @@ record Progress(
     }
     double fed = b.run.fed() - b.run.fedSince(look.at());
     double gone = b.charge.water().get() + b.charge.displaced().low() + fed - b.charge.uptake().high() - seen.get().high() - error.high();
-    double most = b.heat.get().full().high() * seconds(b, heatUp, look.at()) / WaterSteam.latentHeat(b.boiling()) / 958;
+    double most = b.heat.get().full().high() * seconds(b, heatUp, look.at()) / WaterSteam.latentHeat(b.boiling()) / WaterSteam.BOILING_DENSITY;
     if (gone <= most) {
       return Optional.empty();
     }
     List<String> why = new ArrayList<>();
-    boolean cameOver = collected.filter(c -> !b.run.collected().isEmpty() && c.high() >= 0.8 * gone).isPresent();
+    boolean cameOver = collected.filter(c -> !b.run.collected().isEmpty() && c.high() >= Limits.value("came-over-share") * gone).isPresent();
     why.add(String.format(java.util.Locale.ROOT, "%.0f mL are gone from the flask, the heater could have boiled at most %.0f mL", gone * 1e6, most * 1e6));
     why.add(cameOver ? "as much came over: the power in the rig file or the time of heat-on is wrong" : "not in the receiver: a leak or a wrong entry");
     return Optional.of(String.join("; ", why));

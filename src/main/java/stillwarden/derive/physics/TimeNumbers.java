@@ -72,7 +72,7 @@ final class TimeNumbers {
       return;
     }
     double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
-    double perCubicMetre = 998 * WaterSteam.warming(from, b.boiling());
+    double perCubicMetre = WaterSteam.COLD_DENSITY * WaterSteam.warming(from, b.boiling());
     out.put("feed-limit", net.get().times(Limits.value("feed-share") / perCubicMetre), "feed that takes a quarter of the net heat", "PRACTICE; IAPWS-IF97", notes());
   }
 
@@ -104,7 +104,7 @@ final class TimeNumbers {
       return Optional.empty();
     }
     double share = kilograms / b.charge.oilMass().get().nominal();
-    Band water = b.diffusion().times(b.course.get().atShare(share).water() / 997);
+    Band water = b.diffusion().times(b.course.get().atShare(share).water() / WaterSteam.COLD_DENSITY);
     return Optional.of(water.minus(now.collected().get()).atLeast(0));
   }
 
