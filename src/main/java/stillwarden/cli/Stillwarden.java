@@ -8,6 +8,7 @@ import picocli.CommandLine.IVersionProvider;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
+import picocli.CommandLine.UnmatchedArgumentException;
 import stillwarden.describe.Unusable;
 
 /** The command itself; without a subcommand it prints its usage. */
@@ -54,9 +55,18 @@ final class Stillwarden implements Runnable {
   }
 
   private static Exit usage(Desk desk, ParameterException e) {
-    desk.say("stillwarden: " + Plain.words(e.getMessage()));
+    desk.say("stillwarden: " + message(e));
     desk.say("`" + e.getCommandLine().getCommandSpec().qualifiedName() + " --help` shows the usage");
     return Exit.UNUSABLE;
+  }
+
+  private static String message(ParameterException e) {
+    boolean word = e instanceof UnmatchedArgumentException u && !u.isUnknownOption() && !u.getSuggestions().isEmpty();
+    if (!word) {
+      return Plain.words(e.getMessage());
+    }
+    UnmatchedArgumentException u = (UnmatchedArgumentException) e;
+    return "unknown command `" + u.getUnmatched().get(0) + "`; the nearest is `" + u.getSuggestions().get(0) + "`";
   }
 
   private static Exit failed(Desk desk, CommandLine line, Exception e) {
