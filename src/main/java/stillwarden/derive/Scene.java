@@ -13,10 +13,10 @@ import stillwarden.describe.Part;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Rig;
 import stillwarden.describe.Tree;
-import stillwarden.derive.physics.Numbers;
+
 
 /** Everything that the sign makers look at, gathered once for one moment. */
-record Scene(Rig rig, Policy policy, RunState run, Roles roles, Numbers numbers, Timeline time, Looks looks) {
+record Scene(Rig rig, Policy policy, RunState run, Roles roles, Figures numbers, Timeline time, Looks looks) {
   private static final DateTimeFormatter CLOCK = DateTimeFormatter.ofPattern("HH:mm:ss");
 
   boolean live() {
