@@ -7,13 +7,12 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import java.util.TreeMap;
 import java.util.regex.Pattern;
 
 /** Reads a site policy: a site may tighten our limits; loosening one needs a waiver, and none where life is guarded. */
 public final class PolicyReader {
-  private static final Set<String> OWN = Set.of("format", "contacts", "limits", "permits", "shelf-life", "waivers");
+  private static final List<String> OWN = List.of("format", "contacts", "limits", "permits", "shelf-life", "waivers");
   private static final Pattern BARE = Pattern.compile("(0|[1-9][0-9]{0,5})(\\.[0-9]{1,9})?");
   private static final Pattern CONTACT = Pattern.compile("[\\p{L}\\p{N}][\\p{L}\\p{N} _-]{0,39}");
 
@@ -39,8 +38,7 @@ public final class PolicyReader {
     for (String own : OWN) {
       rest = rest.without(own);
     }
-    Map<String, Key> top = new LinkedHashMap<>(words.policyFacts());
-    Map<String, Datum> facts = new Section(top, "a policy file", "", defects).read(rest);
+    Map<String, Datum> facts = new Section(words.policyFacts(), "a policy file", "", OWN, defects).read(rest);
     List<Policy.Waiver> waivers = root.get("waivers").map(this::waivers).orElse(List.of());
     group(root, "limits").forEach(f -> limit(f, waivers));
     Map<String, Boolean> permits = permits(root);
