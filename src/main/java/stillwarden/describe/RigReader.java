@@ -3,6 +3,7 @@ package stillwarden.describe;
 import java.nio.file.Path;
 import java.util.Collections;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -12,6 +13,8 @@ import java.util.regex.Pattern;
 /** Reads a rig file (YAML or JSON): complete and consistent, or {@link Unusable} with every defect. */
 public final class RigReader {
   private static final Pattern NAME = Pattern.compile("[\\p{L}\\p{N}][\\p{L}\\p{N}_-]{0,39}");
+
+  private static final List<String> STRUCTURE = List.of("format", "method", "based-on", "parts", "joints", "openings");
 
   private final Vocabulary words = Vocabulary.get();
   private final Defects defects = new Defects();
@@ -58,7 +61,7 @@ public final class RigReader {
 
   private Map<String, Datum> facts(Node root) {
     Node rest = root;
-    for (String own : List.of("format", "method", "based-on", "parts", "joints", "openings")) {
+    for (String own : STRUCTURE) {
       rest = rest.without(own);
     }
     for (Node.Field f : rest.fields()) {
@@ -67,12 +70,7 @@ public final class RigReader {
         rest = rest.without(f.key());
       }
     }
-    return new Section(topKeys(), "a rig file", "", defects).read(rest);
-  }
-
-  /** With the structural keys among the names, a misspelt {@code jionts} finds its nearest word too. */
-  private Map<String, Key> topKeys() {
-    return words.facts();
+    return new Section(words.facts(), "a rig file", "", STRUCTURE, defects).read(rest);
   }
 
   private void parts(Node n, Map<String, Part> out) {
@@ -80,9 +78,8 @@ public final class RigReader {
       defects.add(n.spot(), "`parts` takes names of parts, here is " + n.describe());
       return;
     }
-    Set<String> reserved = Set.of("place", "charge", "target", "people", "emergency", "seen", "joints", "openings", "parts", "name", "method", "jack", "ring", "bench");
     for (Node.Field f : n.fields()) {
-      boolean taken = reserved.contains(f.key()) && !f.key().equals("jack");
+      boolean taken = STRUCTURE.contains(f.key()) || words.facts().keySet().stream().anyMatch(p -> (p + ".").startsWith(f.key() + "."));
       if (!NAME.matcher(f.key()).matches() || taken) {
         defects.add(f.spot(), Words.quote(f.key()) + (taken ? " means something else here; choose another name for the part"
             : " is no name of a part: letters, digits and `-`, at most 40"));
@@ -127,10 +124,12 @@ public final class RigReader {
   private void references(Part part, Map<String, Part> parts) {
     words.keys(part.kind()).values().stream().filter(k -> k.type() == Key.Type.PART).forEach(k -> {
       Datum d = part.keys().get(k.path());
-      if (d != null && !k.values().contains(d.text()) && !parts.containsKey(d.text())) {
+      Set<String> known = new LinkedHashSet<>(parts.keySet());
+      known.addAll(k.values());
+      if (d != null && !known.contains(d.text())) {
         String also = k.values().isEmpty() ? "" : " or one of " + Words.list(k.values());
         defects.add(d.spot(), Words.quote(d.text()) + " for " + Words.quote(k.path()) + ": the name of a part of this file" + also + " is wanted"
-            + Words.hint(d.text(), parts.keySet()));
+            + Words.hint(d.text(), known));
       }
     });
   }

@@ -12,9 +12,14 @@ import java.util.Set;
  *
  * @param keys what may stand here, by path: {@code hood.running}
  * @param where for the message about an unknown key: {@code a round-bottom flask}
+ * @param besides keys of the same place that somebody else reads: a misspelling of theirs finds them too
  * @param prefix what stands before the path of each datum: {@code flask.}, or empty
  */
-record Section(Map<String, Key> keys, String where, String prefix, Defects defects) {
+record Section(Map<String, Key> keys, String where, String prefix, List<String> besides, Defects defects) {
+  Section(Map<String, Key> keys, String where, String prefix, Defects defects) {
+    this(keys, where, prefix, List.of(), defects);
+  }
+
   /** The data of the group by path, without the prefix; everything wrong goes to {@code defects}. */
   Map<String, Datum> read(Node group) {
     Map<String, Datum> out = new LinkedHashMap<>();
@@ -67,6 +72,7 @@ record Section(Map<String, Key> keys, String where, String prefix, Defects defec
 
   private void unknown(Node.Field f, String at) {
     Set<String> known = names(at);
+    known.addAll(at.isEmpty() ? besides : List.of());
     String place = at.isEmpty() ? where : "`" + prefix + at.substring(0, at.length() - 1) + "`";
     String elsewhere = keys.keySet().stream().filter(k -> k.endsWith("." + f.key())).findFirst().orElse("");
     Optional<String> near = Words.nearest(f.key(), known);
