@@ -90,7 +90,7 @@ final class FakeEngine implements Engine {
 
   @Override
   public PlanSheet plan(Rig rig, Policy policy, Optional<OffsetDateTime> at) {
-    return new PlanSheet(rig.name(), "", List.of(), List.of(), List.of(), List.of(), List.of(), List.of(), "The site decides.");
+    return new PlanSheet(rig.name(), "", List.of(), List.of(), List.of(), List.of(), List.of(), "The site decides.");
   }
 
   @Override

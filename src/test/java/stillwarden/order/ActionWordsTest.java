@@ -2,6 +2,9 @@ package stillwarden.order;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
 import java.util.HashMap;
@@ -9,6 +12,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import stillwarden.describe.Knowledge;
 import stillwarden.describe.Tree;
@@ -25,6 +30,8 @@ class ActionWordsTest {
       "heat-funnel", "drain-unproven", "discard-layer", "to-dryness", "scrape", "clean-unventilated", "mix-waste");
 
   private static final Set<String> FIELDS = Set.of("say", "part", "caution", "done-when", "clears-within", "not", "variants");
+
+  private static final Pattern SHARPENED = Pattern.compile("proposeAs\\(\"([a-z-]+)\",\\s*\"([a-z-]+)\"\\)");
 
   private static Tree words() {
     return Knowledge.section("checklists").get("en").get("actions");
@@ -70,6 +77,18 @@ class ActionWordsTest {
       assertThat(FIELDS).as(id).containsAll(deed.fields().keySet());
       deed.text("clears-within").ifPresent(d -> assertThat(Duration.parse(d)).as(id).isPositive());
     });
+  }
+
+  /** A rule that asks for a sharpened wording which is not there would silently get the plain one. */
+  @Test
+  void everySharpenedWordingThatARuleAsksForIsThere() throws IOException {
+    List<String> asked = new ArrayList<>();
+    try (Stream<Path> files = Files.walk(Path.of("rules"))) {
+      for (Path drl : files.filter(f -> f.toString().endsWith(".drl")).toList()) {
+        SHARPENED.matcher(Files.readString(drl)).results().forEach(m -> asked.add(m.group(1) + "/" + m.group(2)));
+      }
+    }
+    assertThat(asked).allSatisfy(a -> assertThat(says()).containsKey(a));
   }
 
   @Test

@@ -28,10 +28,12 @@ class RulesViewTest {
 
   @Test
   void aCitedIdIsResolvedToItsFullReferenceAndKeepsItsPlace() {
-    Tree sources = new Tree(Map.of("iso2533", Map.of("reference", "ISO 2533:1975, Standard atmosphere"), "common", "Common practice"));
-    assertThat(HazardCard.reference("iso2533 table 1", sources)).isEqualTo("ISO 2533:1975, Standard atmosphere table 1");
-    assertThat(HazardCard.reference("common", sources)).isEqualTo("Common practice");
-    assertThat(HazardCard.reference("elsewhere p. 3", sources)).isEqualTo("elsewhere p. 3");
+    Tree sources = new Tree(Map.of(
+        "ISO-2533", Map.of("ref", "ISO 2533, Standard Atmosphere", "edition", "1975", "seen", "memory"),
+        "COMMON", Map.of("ref", "common practice", "edition", "-", "seen", "seen")));
+    assertThat(HazardCard.reference("ISO-2533 table 1", sources)).isEqualTo("ISO 2533, Standard Atmosphere (1975) table 1, from memory");
+    assertThat(HazardCard.reference("COMMON", sources)).isEqualTo("common practice");
+    assertThat(HazardCard.reference("ELSEWHERE p. 3", sources)).isEqualTo("ELSEWHERE p. 3");
   }
 
   @Test
