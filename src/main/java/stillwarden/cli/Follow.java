@@ -41,13 +41,11 @@ final class Follow {
   /** Until the input ends; a file never does. A log without one usable line by then is unusable. */
   Exit run(String log) throws IOException, InterruptedException, Unusable {
     try (Lines lines = open(log)) {
-      for (Lines.News news = lines.next(); news.open() || news.text().length > 0; news = lines.next()) {
-        text.write(news.text());
-        judge(log, news.text().length > 0 ? Optional.empty() : Optional.of(OffsetDateTime.now(desk.clock())));
-        if (!news.open()) {
-          break;
-        }
-      }
+      Lines.News news;
+      do {
+        news = lines.next();
+        take(log, news);
+      } while (news.open());
     }
     if (last.isEmpty()) {
       desk.defects(unusable);
@@ -63,6 +61,14 @@ final class Follow {
       throw new Unusable(Spot.of(log), "want a run log that can be read");
     }
     return Lines.growing(Path.of(log));
+  }
+
+  private void take(String log, Lines.News news) {
+    text.writeBytes(news.text());
+    boolean silent = news.text().length == 0;
+    if (!silent || news.open() || last.isEmpty()) {
+      judge(log, silent && news.open() ? Optional.of(OffsetDateTime.now(desk.clock())) : Optional.empty());
+    }
   }
 
   private void judge(String name, Optional<OffsetDateTime> at) {

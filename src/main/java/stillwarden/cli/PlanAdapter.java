@@ -16,6 +16,6 @@ final class PlanAdapter {
   static PlanSheet sheet(Rig rig, Policy policy, Optional<OffsetDateTime> at) {
     Advice a = Advisor.inspect(rig, policy, at);
     return new PlanSheet(
-        rig.name(), a.at(), a.numbers(), List.of(), List.of(), List.of(), a.notes(), a.waivers(), a.defersTo());
+        rig.name(), a.at(), a.numbers(), List.of(), List.of(), a.notes(), a.waivers(), a.defersTo());
   }
 }

@@ -25,7 +25,7 @@ final class Figures {
 
   /** {@code 98.5432 Cel}: at most six significant digits, no exponent, no trailing zeros. */
   static String ucum(double value, String unit) {
-    return unit.isEmpty() || unit.equals("1") ? six(value) : six(value) + " " + unit;
+    return unit.equals("1") ? six(value) : six(value) + " " + unit;
   }
 
   static String six(double value) {
@@ -42,10 +42,18 @@ final class Figures {
     return u.word().isEmpty() ? number : number + " " + u.word();
   }
 
-  /** The value with its band, or why there is none. */
+  /** An answer without a unit is a word of a closed list: {@code method} carries the word, {@code notes} the reasons. */
+  static boolean isWord(Estimate e) {
+    return e.known() && e.unit().isEmpty();
+  }
+
+  /** The value with its band, the word with its reasons, or why there is none. */
   static String read(Estimate e) {
     if (!e.known()) {
       return "not known: " + e.reason();
+    }
+    if (isWord(e)) {
+      return e.notes().isEmpty() ? e.method() : e.method() + ", because " + String.join("; ", e.notes());
     }
     String nominal = read(e.nominal(), e.unit());
     return e.low() == e.high() ? nominal : nominal + " (" + read(e.low(), e.unit()) + " to " + read(e.high(), e.unit()) + ")";

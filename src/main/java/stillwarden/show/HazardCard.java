@@ -47,8 +47,16 @@ public record HazardCard(String id, String family, String signal, String urgency
   static String reference(String cited, Tree sources) {
     String id = cited.split(" ", 2)[0];
     Tree entry = sources.get(id);
-    Optional<String> full = entry.text().filter(t -> sources.has(id)).or(() -> entry.text("reference")).or(() -> entry.text("name"));
-    return full.map(f -> f + cited.substring(id.length())).orElse(cited);
+    return entry.text("ref").map(ref -> ref + edition(ref, entry) + cited.substring(id.length()) + seen(entry)).orElse(cited);
+  }
+
+  private static String edition(String ref, Tree entry) {
+    return entry.text("edition").filter(e -> !e.equals("-") && !ref.contains(e)).map(e -> " (" + e + ")").orElse("");
+  }
+
+  /** A reference that nobody looked up for this says so. */
+  private static String seen(Tree entry) {
+    return entry.text("seen").filter("memory"::equals).map(m -> ", from memory").orElse("");
   }
 
   private static String firstSentence(String page) {

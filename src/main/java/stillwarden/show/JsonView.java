@@ -89,6 +89,10 @@ public final class JsonView {
         o.putNull("value").put("reason", e.reason()).someWords("missing", e.missing());
         return;
       }
+      if (Figures.isWord(e)) {
+        o.put("value", e.method()).put("method", String.join("; ", e.notes())).put("source", e.source());
+        return;
+      }
       o.put("value", Figures.ucum(e.nominal(), e.unit())).put("low", Figures.ucum(e.low(), e.unit()));
       o.put("high", Figures.ucum(e.high(), e.unit())).put("method", e.method()).put("source", e.source());
       o.someWords("notes", e.notes());

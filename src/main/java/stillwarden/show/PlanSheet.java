@@ -8,25 +8,20 @@ import stillwarden.derive.Estimate;
  *
  * @param at RFC 3339 text, or empty
  * @param numbers every number of the contract's list, the absent ones with their reason
- * @param words answers that are words, not numbers: the coolant strategy
  * @param lines what else is to be read, in sentences: refill schedule, joint fit, which openings close
  * @param notes what was defaulted, extrapolated or assumed
  */
 public record PlanSheet(
-    String rig, String at, List<Estimate> numbers, List<Word> words, List<Curve> curves, List<String> lines,
+    String rig, String at, List<Estimate> numbers, List<Curve> curves, List<String> lines,
     List<String> notes, List<String> waivers, String defersTo) {
 
   public PlanSheet {
     numbers = List.copyOf(numbers);
-    words = List.copyOf(words);
     curves = List.copyOf(curves);
     lines = List.copyOf(lines);
     notes = List.copyOf(notes);
     waivers = List.copyOf(waivers);
   }
-
-  /** An answer in a word of a closed list, with why in numbers; an empty value is not known. */
-  public record Word(String name, String value, String why, String source) {}
 
   /** A course in time: {@code t} in seconds, values in {@code unit}; all four lists of one length. */
   public record Curve(String name, String unit, List<Double> t, List<Double> low, List<Double> value, List<Double> high) {

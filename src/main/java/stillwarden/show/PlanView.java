@@ -51,25 +51,18 @@ public final class PlanView {
   private static List<String> readable(PlanSheet plan, List<String> names) {
     List<String> lines = new ArrayList<>();
     for (String name : names) {
-      plan.words().stream().filter(w -> w.name().equals(name)).forEach(w -> lines.add(word(w)));
       plan.numbers().stream().filter(e -> e.name().equals(name)).forEach(e -> lines.add(number(e)));
     }
     return lines;
   }
 
-  private static String word(PlanSheet.Word w) {
-    String value = w.value().isEmpty() ? "not known" : w.value();
-    return w.name().replace('-', ' ') + ": " + value + (w.why().isEmpty() ? "" : ", because " + w.why());
-  }
-
   private static String number(Estimate e) {
-    String how = e.known() && !e.method().isEmpty() ? "; " + e.method() : "";
+    String how = e.known() && !Figures.isWord(e) && !e.method().isEmpty() ? "; " + e.method() : "";
     return e.name().replace('-', ' ') + ": " + Figures.read(e) + how;
   }
 
   private static List<String> unlisted(PlanSheet plan, Set<String> shown) {
     Set<String> names = new LinkedHashSet<>();
-    plan.words().forEach(w -> names.add(w.name()));
     plan.numbers().forEach(e -> names.add(e.name()));
     names.removeAll(shown);
     return List.copyOf(names);
@@ -79,7 +72,7 @@ public final class PlanView {
   private static List<String> assumptions(PlanSheet plan) {
     Map<String, List<String>> by = new LinkedHashMap<>();
     plan.notes().forEach(n -> by.computeIfAbsent(n, k -> new ArrayList<>()));
-    for (Estimate e : plan.numbers()) {
+    for (Estimate e : plan.numbers().stream().filter(n -> !Figures.isWord(n)).toList()) {
       e.notes().forEach(n -> by.computeIfAbsent(n, k -> new ArrayList<>()).add(e.name().replace('-', ' ')));
     }
     return by.entrySet().stream()
@@ -90,21 +83,11 @@ public final class PlanView {
     JsonOut out = new JsonOut(true);
     out.object(o -> {
       o.put("format", "stillwarden/plan/1").put("rig", plan.rig()).putOrNull("at", plan.at());
-      List<Runnable> numbers = new ArrayList<>();
-      plan.numbers().forEach(e -> numbers.add(() -> JsonView.number(o, e)));
-      plan.words().forEach(w -> numbers.add(() -> word(o, w)));
-      o.array("numbers", numbers, Runnable::run).array("curves", plan.curves(), c -> curve(o, c));
+      o.array("numbers", plan.numbers(), e -> JsonView.number(o, e)).array("curves", plan.curves(), c -> curve(o, c));
       o.words("lines", plan.lines()).words("notes", plan.notes()).someWords("waivers", plan.waivers());
       o.put("defers-to", plan.defersTo());
     });
     return out.done();
-  }
-
-  private static void word(JsonOut out, PlanSheet.Word w) {
-    out.object(o -> {
-      o.put("name", w.name()).putOrNull("value", w.value());
-      o.put(w.value().isEmpty() ? "reason" : "method", w.why()).putIfAny("source", w.source());
-    });
   }
 
   private static void curve(JsonOut out, PlanSheet.Curve c) {

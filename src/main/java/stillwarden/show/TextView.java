@@ -71,7 +71,7 @@ public final class TextView {
   }
 
   private void action(Advice.Action a) {
-    String by = a.within().map(w -> "  [" + Times.by(advice.at(), w) + "]").orElse("");
+    String by = a.within().map(w -> " [" + Times.by(advice.at(), w) + "]").orElse("");
     page.item(String.format("%2d %-8s ", a.order(), a.signal()), conditional(a) + by);
     String indent = " ".repeat(12);
     a.cautions().forEach(c -> page.item(indent + "Caution: ", c));
@@ -91,7 +91,7 @@ public final class TextView {
   }
 
   private void question(Advice.Question q) {
-    page.item("  - ", q.say() + q.within().map(w -> "  [" + Times.by(advice.at(), w) + "]").orElse(""));
+    page.item("  - ", q.say() + q.within().map(w -> " [" + Times.by(advice.at(), w) + "]").orElse(""));
   }
 
   /** Each rule once, with the deeds and bans that rest on it. */
@@ -100,7 +100,11 @@ public final class TextView {
     advice.actions().forEach(a -> a.because().forEach(b -> reasons.merge(b, "" + a.order(), (x, y) -> x + ", " + y)));
     page.section("Why", List.copyOf(reasons.entrySet()), r -> reason(r.getKey(), r.getValue()));
     List<Advice.Ban> explained = advice.doNot().stream().filter(b -> !b.because().isEmpty()).toList();
-    page.section("Why not", explained, b -> page.item("  - ", b.say() + " " + String.join("; ", b.because()) + "."));
+    page.section("Why not", explained, b -> page.item("  - ", bare(b.say()) + ": " + String.join("; ", b.because())));
+  }
+
+  private static String bare(String sentence) {
+    return sentence.endsWith(".") ? sentence.substring(0, sentence.length() - 1) : sentence;
   }
 
   private void reason(Advice.Because b, String orders) {
