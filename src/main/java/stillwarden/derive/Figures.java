@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import stillwarden.derive.physics.Immiscibility;
 import stillwarden.derive.physics.JointFit;
 import stillwarden.derive.physics.Levels;
 import stillwarden.derive.physics.Numbers;
@@ -51,7 +52,7 @@ final class Figures {
   }
 
   String seat(Joint j) {
-    return j.word("size").map(s -> JointFit.within(s).name().toLowerCase(Locale.ROOT)).orElse("");
+    return j.word("size").flatMap(JointFit::ofText).map(v -> v.seat().name().toLowerCase(Locale.ROOT)).orElse("");
   }
 
   String oilFreezes() {
@@ -124,7 +125,7 @@ final class Figures {
   }
 
   String oilImmiscible() {
-    return facts.immiscible().map(i -> i.usable() ? "yes" : "no").orElse("");
+    return facts.immiscible().map(i -> i.verdict() == Immiscibility.Verdict.REFUSED ? "no" : "yes").orElse("");
   }
 
   boolean barometerConflict() {
@@ -154,7 +155,7 @@ final class Figures {
   Optional<String> levelWord(String role, double cubicMetres) {
     Optional<Double> volume = roles.one(role.equals("flask") ? Role.FLASK : role.equals("reservoir") ? Role.RESERVOIR : Role.RECEIVER).flatMap(p -> p.si("volume"));
     return switch (role) {
-      case "flask" -> volume.map(v -> Levels.flaskWord(cubicMetres, v, facts.minimumLevel().orElse(v / 5), facts.charge().solids().map(b -> b.nominal()).orElse(0.0), policy));
+      case "flask" -> volume.map(v -> Levels.flaskWord(cubicMetres, v, facts.minimumLevel().orElse(v / 5), facts.charge().displaced().nominal(), policy));
       case "reservoir" -> volume.map(v -> Levels.reservoirWord(cubicMetres, v));
       default -> volume.map(v -> Levels.receiverWord(cubicMetres, v));
     };
@@ -187,7 +188,7 @@ final class Figures {
       case "coolant-strategy" -> facts.coolant().ifPresent(c -> out.addAll(c.reasons()));
       case "water-budget" -> out.add(facts.waterBudget().map(SideFacts.Shortage::what).orElse("enough water, computed"));
       case "mantle-fit" -> out.add(facts.mantle().map(SideFacts.Fit::why).orElse("mantle fit not known"));
-      case "oil-immiscible" -> out.add(facts.immiscible().map(Object::toString).orElse("solubility of the oil not known"));
+      case "oil-immiscible" -> out.add(facts.immiscible().map(Immiscibility::reason).orElse("solubility of the oil not known"));
       case "receiver-capacity" -> out.add("receiver volume against the planned distillate");
       default -> out.add(sign);
     }

@@ -59,12 +59,12 @@ public record Timeline(
     return new Timeline(stage(run, drop, cut, boilEnd, cooling), heatOn, boil, drop, cut, boilEnd, end, uncleared);
   }
 
-  boolean live() {
+  public boolean live() {
     return stage.equals("heating") || stage.equals("running") || stage.equals("stopping");
   }
 
   /** Vapour is being made, or may be. */
-  boolean vapour(Instant at) {
+  public boolean vapour(Instant at) {
     return live() && boilStart.filter(b -> !b.isAfter(at)).isPresent();
   }
 
