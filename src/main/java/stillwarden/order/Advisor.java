@@ -37,11 +37,9 @@ public final class Advisor {
   public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at, Judge judge, boolean closeJudge) {
     OffsetDateTime when = at.orElseGet(() -> latest(log));
     Situation s = situation(rig, policy, log, when);
-    Judgement j;
+    Judgement j = judge.judge(SetupFaults.with(s, judge.judge(s.signs())));
     if (closeJudge) {
-      j = Judge.once(judge, s.signs());
-    } else {
-      j = judge.judge(s.signs());
+      judge.close();
     }
     return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(log.leftOut());
   }

@@ -201,7 +201,7 @@ final class Answer {
   private List<Advice.Ban> bans(List<Arrange.Bar> bars) {
     List<Advice.Ban> out = new ArrayList<>();
     for (Arrange.Bar b : bars) {
-      if (out.size() < MOST_BANS && !b.deed().startsWith("@")) {
+      if (out.size() < MOST_BANS && b.named()) {
         Set<String> why = new TreeSet<>();
         b.reasons().forEach(f -> why.add(f.rule()));
         out.add(new Advice.Ban(b.deed(), Wording.english().not(b.deed()), b.until(), List.copyOf(why)));

@@ -29,7 +29,13 @@ final class Arrange {
   record Plan(List<Step> steps, List<Bar> bans, List<String> cycle) {}
 
   /** A deed that must not be done, or not before something. */
-  record Bar(String deed, String until, List<Finding> reasons) {}
+  record Bar(String deed, String until, boolean named, List<Finding> reasons) {
+    /** A plain ban is stronger than one with {@code until}; what a rule named is told, what only a group brought is not. */
+    Bar with(Bar other) {
+      String both = until.isEmpty() || other.until.isEmpty() ? "" : until;
+      return new Bar(deed, both, named || other.named, joined(reasons, other.reasons));
+    }
+  }
 
   private final ToDoubleFunction<Step> timeToHarm;
   private final ToIntFunction<Step> walkRound;
@@ -57,11 +63,7 @@ final class Arrange {
     for (Finding f : graveFirst) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Forbid ban) {
-          // a plain ban is stronger than one with `until`
-          out.merge(
-              ban.deed(),
-              new Bar(ban.deed(), ban.until(), List.of(f)),
-              (a, b) -> new Bar(a.deed(), a.until().isEmpty() || b.until().isEmpty() ? "" : a.until(), joined(a.reasons(), b.reasons())));
+          Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until(), ban.deed().equals(deed), List.of(f)), Bar::with));
         }
       }
     }
@@ -129,9 +131,12 @@ final class Arrange {
 
   private static Set<Edge> edges(List<Finding> active, Map<String, Bar> bars, Collection<Step> steps) {
     Set<Edge> out = new HashSet<>();
+    boolean alarm = active.stream().anyMatch(f -> !Hazards.speaking(f).end() && !Hazards.of(f.hazard()).end() && cuts(f));
     for (Finding f : active) {
+      // the leisurely order of a planned end gives way once a hazard asks for an energy cut
+      boolean givesWay = alarm && Hazards.of(f.hazard()).end();
       for (Statement s : f.statements()) {
-        if (s instanceof Statement.Before b) {
+        if (s instanceof Statement.Before b && !givesWay) {
           link(steps, b.first(), b.then(), out);
         }
       }
@@ -142,6 +147,10 @@ final class Arrange {
       }
     }
     return out;
+  }
+
+  private static boolean cuts(Finding f) {
+    return f.statements().stream().anyMatch(s -> s instanceof Statement.Propose p && Deeds.of(p.action()).cut());
   }
 
   private static void link(Collection<Step> steps, String first, String then, Set<Edge> out) {

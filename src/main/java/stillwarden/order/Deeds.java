@@ -52,6 +52,11 @@ final class Deeds {
     return d;
   }
 
+  /** The deeds of a group ({@code @rig-side}), or the deed itself. */
+  static List<String> group(String deedOrGroup) {
+    return deedOrGroup.startsWith("@") ? Knowledge.section("groups").words(deedOrGroup) : List.of(deedOrGroup);
+  }
+
   static Set<String> ids() {
     return ALL.keySet();
   }
