@@ -63,15 +63,17 @@ public record Situation(
     new HeatSigns(scene, out).make();
     PathFinding path = new PathSigns(scene, out).make();
     boolean run = withRun && scene.time().heatOn().isPresent();
+    new SetupExtras(scene, out).make();
     new TipSigns(scene, out).make();
     new CondenserSigns(scene, out).make(run);
-    if (withRun) {
-      new EventSigns(scene, out).make();
-    }
     if (run) {
       new WaterSigns(scene, out).make();
       new TemperatureSigns(scene, out).make();
       new EndSigns(scene, out).make();
+    }
+    if (withRun) {
+      new EventSigns(scene, out).make();
+      new RunExtras(scene, out).make();
     }
     new PeopleSigns(scene, out).make();
     overCheck(scene, out);

@@ -1,11 +1,12 @@
 package stillwarden.describe;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.nio.charset.StandardCharsets;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.TreeMap;
 
@@ -14,6 +15,8 @@ import java.util.TreeMap;
  * {@code 450 mL}, and the same on every machine.
  */
 final class Digest {
+  private static final MathContext NINE_DIGITS = new MathContext(9);
+
   private Digest() {}
 
   static String of(String method, Map<String, Datum> facts, Map<String, Part> parts, List<Joint> joints, Map<Port, Datum> openings) {
@@ -46,6 +49,10 @@ final class Digest {
 
   /** Quantities by their SI value to nine digits: more would tell `450 mL` from `0.45 L`. */
   static String value(Datum d) {
-    return d.measured().map(q -> String.format(Locale.ROOT, "%.8e %s", q.si(), q.dimension().si())).orElse(d.text());
+    return d.measured().map(q -> number(q.si()) + " " + q.dimension().si()).orElse(d.text());
+  }
+
+  static String number(double si) {
+    return new BigDecimal(si).round(NINE_DIGITS).stripTrailingZeros().toString();
   }
 }

@@ -201,7 +201,7 @@ public final class PolicyReader {
     TreeMap<String, String> lines = new TreeMap<>(limitWords);
     facts.forEach((k, d) -> lines.put("fact " + k, d.text()));
     contacts.forEach((k, v) -> lines.put("contact " + k, v));
-    limits.forEach((k, v) -> lines.put("limit " + k, String.format(java.util.Locale.ROOT, "%.8e", v)));
+    limits.forEach((k, v) -> lines.put("limit " + k, Digest.number(v)));
     permits.forEach((k, v) -> lines.put("permits " + k, v.toString()));
     shelf.forEach((k, v) -> lines.put("shelf " + k, v.toString()));
     waivers.forEach(w -> lines.put("waiver " + w, ""));

@@ -26,7 +26,8 @@ record Shares(Key key, String path, Defects defects) {
   private void share(Node.Field f, Map<String, Datum> out) {
     List<String> known = Values.listed(key.list());
     if (!known.isEmpty() && !known.contains(f.key())) {
-      defects.add(f.spot(), Words.quote(f.key()) + " is not in the list of " + key.list() + Words.hint(f.key(), known));
+      defects.add(f.spot(), Words.quote(f.key()) + " is not in the list of " + key.list() + Words.hint(f.key(), known)
+          + "; leave out what is not listed: the rest of the whole counts as unknown");
       return;
     }
     try {

@@ -2,6 +2,7 @@ package stillwarden.describe;
 
 import java.time.Duration;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -14,6 +15,8 @@ import java.util.Set;
  * its file.
  */
 public final class Vocabulary {
+  /** A few dozen bounds stand under hundreds of keys; reading each once halves what a one-shot command waits for. */
+  private static final Map<String, Double> BOUNDS = new HashMap<>();
   private static final Vocabulary ONLY = new Vocabulary();
 
   private final Tree rig = Knowledge.section("words").get("rig");
@@ -206,7 +209,8 @@ public final class Vocabulary {
     if (text.isEmpty()) {
       return OptionalDouble.empty();
     }
-    return OptionalDouble.of(d.orElseThrow() == Dimension.COUNT ? Double.parseDouble(text.get()) : si(text.get(), d.get()));
+    return OptionalDouble.of(d.orElseThrow() == Dimension.COUNT ? Double.parseDouble(text.get())
+        : BOUNDS.computeIfAbsent(d.get() + " " + text.get(), t -> si(text.get(), d.get())));
   }
 
   static Duration duration(String text) {
