@@ -53,6 +53,7 @@ interface Lines extends AutoCloseable {
     FromStream(InputStream in) {
       Thread reader = new Thread(() -> read(new BufferedInputStream(in)), "log-reader");
       reader.setDaemon(true);
+      reader.setUncaughtExceptionHandler((thread, broken) -> queue.add(new News(new byte[0], false)));
       reader.start();
     }
 

@@ -37,7 +37,7 @@ final class Stillwarden implements Runnable {
     try {
       int code = commandLine(desk).execute(args);
       return code == 0 ? Exit.NOTHING_TO_DO : code == 1 ? Exit.SOMETHING_TO_DO : Exit.UNUSABLE;
-    } catch (Exception | StackOverflowError | OutOfMemoryError e) {
+    } catch (Throwable e) { // no stack trace ever reaches a user, whatever broke
       return fault(desk, e);
     }
   }

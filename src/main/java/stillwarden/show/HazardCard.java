@@ -59,14 +59,11 @@ public record HazardCard(String id, String family, String signal, String urgency
     return entry.text("seen").filter("memory"::equals).map(m -> ", from memory").orElse("");
   }
 
-  private static String firstSentence(String page) {
-    for (String line : page.split("\n")) {
-      if (!line.isBlank() && !line.startsWith("#")) {
-        int end = line.indexOf(". ");
-        return end < 0 ? line.strip() : line.substring(0, end + 1).strip();
-      }
-    }
-    return "";
+  static String firstSentence(String page) {
+    String paragraph = page.replaceAll("(?m)^#.*$", "").strip().split("\\n\\s*\\n", 2)[0];
+    String text = paragraph.strip().replaceAll("\\s+", " ");
+    int end = text.indexOf(". ");
+    return end < 0 ? text : text.substring(0, end + 1);
   }
 
   /** Family by family, in order. */

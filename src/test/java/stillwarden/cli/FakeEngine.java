@@ -68,6 +68,9 @@ final class FakeEngine implements Engine {
     if (rig.name().equals("broken")) {
       throw new IllegalStateException("a\nbug");
     }
+    if (rig.name().equals("unlinked")) {
+      throw new NoClassDefFoundError("a class");
+    }
     return advice(rig.name(), rig.name(), at);
   }
 

@@ -45,7 +45,7 @@ class StillwardenTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"start, 0", "carry-on, 0", "not-yet, 1", "adjust, 1", "wind-down, 1", "stop, 1", "bad, 2", "broken, 2"})
+  @CsvSource({"start, 0", "carry-on, 0", "not-yet, 1", "adjust, 1", "wind-down, 1", "stop, 1", "bad, 2", "broken, 2", "unlinked, 2"})
   void theExitStatusSaysWhetherThereIsSomethingToDo(String rig, int status) {
     assertThat(run("inspect", rig)).isEqualTo(status);
   }

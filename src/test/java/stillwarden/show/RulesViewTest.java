@@ -37,6 +37,13 @@ class RulesViewTest {
   }
 
   @Test
+  void withoutALineOfItsOwnAHazardHasTheFirstSentenceOfItsPage() {
+    assertThat(HazardCard.firstSentence("## What goes wrong\nThe water is nearly\nused up. Soon it is dry.\n\n## What to do\nStop."))
+        .isEqualTo("The water is nearly used up.");
+    assertThat(HazardCard.firstSentence("")).isEmpty();
+  }
+
+  @Test
   void whyShowsEachConditionWithWhatIsKnown() {
     Explanation e = new Explanation("flask-low-no-reserve", List.of(new Explanation.RuleView("the flask runs low", "could", List.of(
         new Explanation.SignView("flask-level", "low", "low", "yes", "seen 10:52:00 by nk", ""),
