@@ -2,6 +2,7 @@ package stillwarden.derive.physics;
 
 import java.util.Locale;
 import java.util.Optional;
+import java.util.Set;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
@@ -12,6 +13,8 @@ import java.util.regex.Pattern;
 public final class JointFit {
   private static final Pattern SIZE = Pattern.compile("(ball|s|ks|ns|st|st\\.)?\\s*(\\d{1,3}(?:\\.\\d)?)\\s*/\\s*(\\d{1,3})\\s*(ball)?");
   private static final double SAME_DIAMETER = 0.6;
+  /** Pairs that are written without the word and can only be balls: no taper has that wide end with so short a zone. */
+  private static final Set<String> BALLS = Set.of("12/1", "12/2", "12/3", "12/5", "18/7", "18/9", "28/12", "28/15", "35/20", "35/25", "40/25", "50/30", "65/40");
 
   private JointFit() {}
 
@@ -39,7 +42,7 @@ public final class JointFit {
     if (!m.matches()) {
       return Optional.empty();
     }
-    boolean ball = "ball".equals(m.group(1)) || "s".equals(m.group(1)) || m.group(4) != null;
+    boolean ball = "ball".equals(m.group(1)) || "s".equals(m.group(1)) || m.group(4) != null || BALLS.contains(m.group(2) + "/" + m.group(3));
     return Optional.of(new Size(ball, Double.parseDouble(m.group(2)), Integer.parseInt(m.group(3))));
   }
 
