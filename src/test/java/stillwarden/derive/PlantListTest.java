@@ -21,7 +21,8 @@ import stillwarden.describe.Tree;
 /**
  * The plant list audits itself. Every test gathers what is wrong over all plants and reports it together.
  *
- * <p>Shares are mass fractions; {@code solids-volume} is mL a gram of material as weighed, {@code water-uptake} kg a kg.
+ * <p>Shares are mass fractions; {@code solids-volume} is mL a gram of material as weighed, {@code water-uptake}
+ * kg a kg.
  */
 class PlantListTest {
   private static final Tree PLANTS = Knowledge.section("plants");
@@ -36,8 +37,9 @@ class PlantListTest {
       "burns", YES_NO, "toxic", YES_NO, "gives-toxic-gas", YES_NO, "reacts-with-water", YES_NO,
       "foams", Set.of("no", "some", "strongly"), "oil-density", Set.of("light", "heavy", "near", "unknown"));
 
-  /** A tenth of the oil being one of the poisons makes the oil one; camphor counts from three tenths (its air limit is 2 ppm). */
-  private static final Map<String, Double> POISONS = Map.of("thujone", 0.1, "pulegone", 0.1, "safrole", 0.1, "camphor", 0.3);
+  /** Our proposal: a tenth of a poison makes the oil one; of camphor three tenths (its limit in air is 2 ppm). */
+  private static final Map<String, Double> POISONS =
+      Map.of("thujone", 0.1, "pulegone", 0.1, "safrole", 0.1, "camphor", 0.3);
 
   @Test
   void theListNamesWhatLaboratoriesDistilAndWhatTheyMustNot() {
