@@ -124,10 +124,11 @@ final class RigGraph {
   }
 
   Kind kind(Port p) {
-    Optional<Role> role = roles.of(p.part());
-    return role.filter(Role.RESERVOIR::equals).isPresent()
-        ? Kind.FEED
-        : role.filter(DOWNSTREAM::contains).isPresent() ? Kind.DESIGNED : Kind.OTHER;
+    return downstream(p) ? Kind.DESIGNED : roles.is(p.part(), Role.RESERVOIR) ? Kind.FEED : Kind.OTHER;
+  }
+
+  boolean downstream(Port p) {
+    return roles.of(p.part()).filter(DOWNSTREAM::contains).isPresent();
   }
 
   /** The delivery tip: the take-off's outlet, or without a take-off the condenser's own lower end. */
@@ -172,7 +173,9 @@ final class RigGraph {
   }
 
   Stream<Edge> edgesAt(Port node) {
-    return byNode.getOrDefault(node, List.of()).stream();
+    List<Edge> at = byNode.getOrDefault(node, List.of());
+    work += at.size();
+    return at.stream();
   }
 
   boolean holdsVapour(Port p) {
@@ -190,12 +193,7 @@ final class RigGraph {
     Deque<Port> queue = new ArrayDeque<>(found);
     while (!queue.isEmpty()) {
       Port at = queue.remove();
-      for (Edge e : byNode.getOrDefault(at, List.of())) {
-        work++;
-        if (passes.test(e) && found.add(e.other(at))) {
-          queue.add(e.other(at));
-        }
-      }
+      edgesAt(at).filter(passes).map(e -> e.other(at)).filter(found::add).forEach(queue::add);
     }
     return found;
   }
