@@ -21,7 +21,7 @@ final class Exits {
       hoseEnd(part);
       return;
     }
-    boolean receives = graph.roles.is(part.name(), Role.RECEIVER);
+    boolean receives = graph.is(part.name(), Role.RECEIVER);
     if (receives && !graph.joined(part)) {
       return; // stands free: its mouth is no end of the chain of glass
     }
@@ -39,13 +39,13 @@ final class Exits {
   private Gate at(Part part, Port port) {
     List<Gate> said = new ArrayList<>();
     opening(port).ifPresent(said::add);
-    if (port.port().equals("side-arm") && graph.roles.is(part.name(), Role.TAKE_OFF)) {
+    if (port.port().equals("side-arm") && graph.is(part.name(), Role.TAKE_OFF)) {
       part.word("side-arm").map(w -> word(port, w)).ifPresent(said::add);
     }
-    if (port.port().equals("top") && graph.roles.is(part.name(), Role.RESERVOIR)) {
+    if (port.port().equals("top") && graph.is(part.name(), Role.RESERVOIR)) {
       said.add(stopper(part, port, !said.isEmpty()));
     }
-    if (port.port().equals("upper") && graph.roles.is(part.name(), Role.CONDENSER)) {
+    if (port.port().equals("upper") && graph.is(part.name(), Role.CONDENSER)) {
       graph.seen.word(Look.CONDENSER_TOP).map(w -> word(port, w)).ifPresent(said::add);
     }
     if (graph.isTip(port)) {
@@ -71,7 +71,7 @@ final class Exits {
   }
 
   private String path(Port port) {
-    return graph.roles.is(port.part(), Role.TAKE_OFF) && port.port().equals("side-arm") ? port.toString() : "openings." + graph.name(port);
+    return graph.is(port.part(), Role.TAKE_OFF) && port.port().equals("side-arm") ? port.toString() : "openings." + graph.name(port);
   }
 
   private Gate stopper(Part part, Port port, boolean alreadySaid) {
@@ -107,7 +107,7 @@ final class Exits {
 
   /** "Nothing else on the bench" leaves no stopper that could be in it. */
   private Gate unlisted(Part part, Port port) {
-    if (graph.roles.of(part.name()).isPresent()) {
+    if (graph.hasRole(part.name())) {
       graph.unlisted.add(port);
     }
     return graph.rig.nothingElse() ? Gate.OPEN : Gate.unknown(graph.name(port), "is in no joint, and nobody said whether it is open", path(port));

@@ -49,7 +49,7 @@ final class Layout {
     Set<String> vapour = end.map(e -> between(flask, RigGraph.space(e.name()))).orElse(Set.of());
     return graph.roles.all(Role.RESERVOIR).stream()
         .flatMap(r -> between(flask, RigGraph.space(r.name())).stream())
-        .filter(p -> !graph.roles.is(p, Role.FLASK) && !graph.roles.is(p, Role.CLAISEN))
+        .filter(p -> !graph.is(p, Role.FLASK) && !graph.is(p, Role.CLAISEN))
         .anyMatch(vapour::contains);
   }
 
@@ -90,14 +90,14 @@ final class Layout {
 
   /** Rig paths of the bores at one node; a take-off's outlet has one that no key states, so it stands for itself. */
   private Stream<String> bores(Port node) {
-    boolean takeOff = graph.roles.is(node.part(), Role.TAKE_OFF);
+    boolean takeOff = graph.is(node.part(), Role.TAKE_OFF);
     if (takeOff && node.port().equals("side-arm")) {
       return Stream.concat(Stream.of(node + "-bore"), tubes());
     }
     if (takeOff && node.port().equals("outlet")) {
       return Stream.of(graph.name(node));
     }
-    return node.port().isEmpty() ? graph.roles.of(node.part()).map(BORES::get).map(k -> node.part() + "." + k).stream() : Stream.empty();
+    return node.port().isEmpty() ? graph.role(node.part()).map(BORES::get).map(k -> node.part() + "." + k).stream() : Stream.empty();
   }
 
   /** Hoses in no joint: they hang on the side arm that ends in a tube. */
@@ -108,7 +108,7 @@ final class Layout {
   List<String> unreached(Set<Port> linked) {
     return graph.rig.parts().values().stream()
         .filter(p -> Passages.holdsVapour(p.kind()) && !linked.contains(RigGraph.space(p.name())))
-        .filter(p -> !graph.roles.is(p.name(), Role.RECEIVER) && graph.roles.of(p.name()).isPresent() && !endsTube(p))
+        .filter(p -> !graph.is(p.name(), Role.RECEIVER) && graph.hasRole(p.name()) && !endsTube(p))
         .map(Part::name)
         .toList();
   }

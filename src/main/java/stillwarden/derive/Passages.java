@@ -73,10 +73,10 @@ final class Passages {
   }
 
   private Gate solids(Part part, Port port) {
-    if (graph.roles.is(part.name(), Role.CONDENSER) && port.port().equals("lower")) {
+    if (graph.is(part.name(), Role.CONDENSER) && port.port().equals("lower")) {
       return solids(part, Look.CONDENSER_SOLIDS);
     }
-    boolean takeOff = graph.roles.is(part.name(), Role.TAKE_OFF) && port.port().equals("inlet");
+    boolean takeOff = graph.is(part.name(), Role.TAKE_OFF) && port.port().equals("inlet");
     return takeOff ? solids(part, Look.TAKE_OFF_SOLIDS) : Gate.OPEN;
   }
 
@@ -90,8 +90,8 @@ final class Passages {
 
   /** Foam or plant in the head closes nothing for sure and leaves nothing proven open. */
   private Gate foam(Part part, Port port) {
-    boolean head = graph.roles.is(part.name(), Role.HEAD) && port.port().equals("side-arm");
-    boolean headless = graph.roles.all(Role.HEAD).isEmpty() && graph.roles.is(part.name(), Role.CONDENSER);
+    boolean head = graph.is(part.name(), Role.HEAD) && port.port().equals("side-arm");
+    boolean headless = graph.roles.all(Role.HEAD).isEmpty() && graph.is(part.name(), Role.CONDENSER);
     if (!head && !(headless && port.port().equals("upper"))) {
       return Gate.OPEN;
     }

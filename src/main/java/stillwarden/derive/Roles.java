@@ -10,6 +10,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.Predicate;
+import java.util.stream.Stream;
 import stillwarden.describe.Joint;
 import stillwarden.describe.Part;
 import stillwarden.describe.Port;
@@ -52,10 +53,6 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
     return parts.keySet().stream().filter(r -> all(r).stream().anyMatch(p -> p.name().equals(partName))).findFirst();
   }
 
-  boolean is(String partName, Role role) {
-    return all(role).stream().anyMatch(p -> p.name().equals(partName));
-  }
-
   /** Works one rig out; thrown away afterwards. */
   private static final class Sorter {
     private final Rig rig;
@@ -96,8 +93,8 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
     /** A round-bottom flask boils or receives: the joints tell, then its keys, then what is left over. */
     private void flasks() {
       List<Part> open = new ArrayList<>(take(Role.FLASK));
-      settle(open, Role.RECEIVER, p -> leadsTo(p, Set.of("outlet", "lower")));
       settle(open, Role.FLASK, p -> leadsTo(p, Set.of("foot")));
+      settle(open, Role.RECEIVER, p -> leadsTo(p, Set.of("outlet", "lower")));
       settle(open, Role.FLASK, p -> any(p, BOILS));
       settle(open, Role.RECEIVER, p -> any(p, RECEIVES));
       // with a boiling flask found, any other stands by as a receiver; with none, nobody can say which of them boils
@@ -167,7 +164,7 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
       return standing(what).anyMatch(jack.name()::equals);
     }
 
-    private java.util.stream.Stream<String> standing(Role what) {
+    private Stream<String> standing(Role what) {
       return found.getOrDefault(what, List.of()).stream().flatMap(p -> p.word("stands-on").stream());
     }
   }

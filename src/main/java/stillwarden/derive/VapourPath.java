@@ -149,7 +149,7 @@ public final class VapourPath {
   }
 
   private String lastOfChain() {
-    return linked.stream().filter(p -> p.port().isEmpty()).reduce(flask, (first, next) -> next).part();
+    return linked.stream().filter(p -> graph.holdsVapour(p) && graph.kind(p) != Kind.FEED).reduce(flask, (first, next) -> next).part();
   }
 
   /** Exits that a push would open by moving liquid, over and above those that vent freely. */
@@ -166,14 +166,14 @@ public final class VapourPath {
   private Relief relief() {
     Set<Port> pushed = graph.reach(flask, e -> e.gate().yields());
     Set<Port> perhaps = graph.reach(flask, e -> e.gate().mayPass() || e.gate().liquid());
-    return feeds(sure, Gate::isOpen)
+    return ventsByReservoir(sure, Gate::isOpen)
         ? Relief.FREE
-        : feeds(pushed, Gate::yields)
+        : ventsByReservoir(pushed, Gate::yields)
             ? Relief.THROUGH_LIQUID
-            : feeds(perhaps, g -> g.mayPass() || g.liquid()) ? Relief.UNKNOWN : Relief.NONE;
+            : ventsByReservoir(perhaps, g -> g.mayPass() || g.liquid()) ? Relief.UNKNOWN : Relief.NONE;
   }
 
-  private boolean feeds(Set<Port> reached, Predicate<Gate> gate) {
+  private boolean ventsByReservoir(Set<Port> reached, Predicate<Gate> gate) {
     return exits(reached, gate).anyMatch(e -> e.kind() == Kind.FEED);
   }
 
