@@ -44,6 +44,11 @@ final class Passages {
     return THROUGH.contains(kind) || !portsOfKind(kind).isEmpty();
   }
 
+  /** What fills the port that it is put into. */
+  static boolean isSolid(String kind) {
+    return SOLID.contains(kind);
+  }
+
   /** A flask with several necks has {@code neck-1} and so on, as many as stated; with no number, those that are named. */
   static List<String> portsOf(Part part, boolean named) {
     List<String> own = portsOfKind(part.kind());
@@ -176,9 +181,9 @@ final class Passages {
 
   private Gate side(Port p) {
     Part part = graph.rig.parts().get(p.part());
-    if (part == null || (!holdsVapour(part.kind()) && !SOLID.contains(part.kind()))) {
+    if (part == null || (!holdsVapour(part.kind()) && !isSolid(part.kind()))) {
       return Gate.unknown(p.toString(), "is no glass that is described", p.part() + ".kind");
     }
-    return SOLID.contains(part.kind()) ? Gate.plugged(p.toString(), "fills the port") : isThrough(part) ? Exits.bore(graph, part) : Gate.OPEN;
+    return isSolid(part.kind()) ? Gate.plugged(p.toString(), "fills the port") : isThrough(part) ? Exits.bore(graph, part) : Gate.OPEN;
   }
 }

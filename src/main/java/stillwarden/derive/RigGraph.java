@@ -161,14 +161,14 @@ final class RigGraph {
     return own.size() == 1 && (p.port().isEmpty() || alias) ? new Port(p.part(), own.get(0)) : p;
   }
 
-  /** Ports of a part: those of its kind and those that the file names besides. */
+  /** Ports of a part: those of its kind and those that the file names besides; glass of an unknown kind has the latter. */
   Set<Port> ports(Part part) {
     Set<Port> out = new LinkedHashSet<>();
     names.keySet().stream().filter(p -> p.part().equals(part.name()) && !p.port().isEmpty()).forEach(out::add);
     for (String own : Passages.portsOf(part, !out.isEmpty())) {
       out.add(new Port(part.name(), own));
     }
-    return Passages.holdsVapour(part.kind()) ? out : Set.of();
+    return Passages.isSolid(part.kind()) ? Set.of() : out;
   }
 
   String name(Port p) {

@@ -4,6 +4,7 @@ import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
 import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
@@ -49,6 +50,7 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
     return all(role).size() == 1 ? Optional.of(all(role).get(0)) : Optional.empty();
   }
 
+  /** The role of a part by its name. */
   public Optional<Role> of(String partName) {
     return parts.keySet().stream().filter(r -> all(r).stream().anyMatch(p -> p.name().equals(partName))).findFirst();
   }
@@ -57,7 +59,7 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
   private static final class Sorter {
     private final Rig rig;
     private final Map<Role, List<Part>> found = new EnumMap<>(Role.class);
-    private final List<Role> absent = new ArrayList<>();
+    private final Set<Role> absent = EnumSet.noneOf(Role.class);
     private final List<Part> others = new ArrayList<>();
 
     Sorter(Rig rig) {
@@ -69,8 +71,9 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
       flasks();
       funnels();
       jacks();
+      absent.removeAll(found.keySet());
       List<Role> missing = Role.IN_FLASK.stream().filter(r -> !found.containsKey(r) && !absent.contains(r)).toList();
-      return new Roles(found, missing, absent, others);
+      return new Roles(found, missing, List.copyOf(absent), others);
     }
 
     private void byKind(Part p) {

@@ -25,6 +25,7 @@ public final class VapourPath {
   private final Port flask;
   private final Set<Port> sure;
   private final Set<Port> may;
+  private final Set<Port> pushed;
   private final Set<Port> linked;
 
   private VapourPath(RigGraph graph, Port flask) {
@@ -32,6 +33,7 @@ public final class VapourPath {
     this.flask = flask;
     this.sure = graph.reach(flask, e -> e.gate().isOpen());
     this.may = graph.reach(flask, e -> e.gate().mayPass());
+    this.pushed = graph.reach(flask, e -> e.gate().yields());
     this.linked = graph.reach(flask, e -> true);
   }
 
@@ -59,7 +61,7 @@ public final class VapourPath {
     List<Exit> designed = open.stream().filter(e -> e.kind() == Kind.DESIGNED).toList();
     State state = state(designed);
     List<Port> vents = open.stream().map(Exit::at).distinct().toList();
-    List<Port> pushed = throughLiquid(vents);
+    List<Port> throughLiquid = throughLiquid(vents);
     Layout layout = new Layout(graph, flask);
     return new PathFinding(
         state,
@@ -67,9 +69,9 @@ public final class VapourPath {
         closures(state),
         state == State.UNKNOWN ? deciding() : List.of(),
         vents,
-        pushed,
+        throughLiquid,
         !graph.leakSomewhere && exits(may, Gate::mayPass).map(Exit::at).distinct().count() == vents.size(),
-        last(vents, pushed),
+        last(vents, throughLiquid),
         relief(),
         inletUpstream(),
         layout.narrowest(designed),
@@ -154,17 +156,15 @@ public final class VapourPath {
 
   /** Exits that a push would open by moving liquid, over and above those that vent freely. */
   private List<Port> throughLiquid(List<Port> vents) {
-    Set<Port> pushed = graph.reach(flask, e -> e.gate().yields());
     return exits(pushed, Gate::yields).map(Exit::at).distinct().filter(p -> !vents.contains(p)).toList();
   }
 
-  private static Optional<Port> last(List<Port> vents, List<Port> pushed) {
-    List<Port> left = vents.isEmpty() ? pushed : vents;
+  private static Optional<Port> last(List<Port> vents, List<Port> throughLiquid) {
+    List<Port> left = vents.isEmpty() ? throughLiquid : vents;
     return left.size() == 1 ? Optional.of(left.get(0)) : Optional.empty();
   }
 
   private Relief relief() {
-    Set<Port> pushed = graph.reach(flask, e -> e.gate().yields());
     Set<Port> perhaps = graph.reach(flask, e -> e.gate().mayPass() || e.gate().liquid());
     return ventsByReservoir(sure, Gate::isOpen)
         ? Relief.FREE

@@ -90,4 +90,11 @@ class RolesTest {
   void aSplashHeadIsAHead() {
     assertThat(names(RigBuilder.good().with("head.kind", "splash-head"), Role.HEAD)).containsExactly("head");
   }
+
+  @Test
+  void aSecondPartThatIsThereOutranksOneThatIsNot() {
+    Roles r = Roles.of(RigBuilder.good().part("condenser-2", "none").rig());
+    assertThat(r.absent()).isEmpty();
+    assertThat(r.one(Role.CONDENSER)).isPresent();
+  }
 }

@@ -18,7 +18,7 @@ import stillwarden.describe.Rig;
 @DisplayName("The vapour path of rigs put together at random")
 class VapourPathRandomTest {
   private static final long SEED = Long.getLong("stillwarden.seed", 20260414L);
-  private static final int RIGS = 5_000;
+  private static final int RIGS = Integer.getInteger("stillwarden.rigs", 5_000);
 
   @BeforeAll
   static void tell() {

@@ -425,4 +425,59 @@ class VapourPathTest {
       assertThat(texts(f)).as(port).contains("receiver is gas-tight");
     }
   }
+
+  @Test
+  void closingEitherOpeningAloneLeavesTheOtherAsTheLast() {
+    for (String closed : List.of("take-off.side-arm", "take-off.outlet")) {
+      String other = closed.endsWith("outlet") ? "side-arm" : "outlet";
+      PathFinding f = of(good().with("openings." + closed, "capped"));
+      assertThat(f.path()).as(closed).isEqualTo(State.OPEN);
+      assertThat(f.last()).as(closed).contains(new Port("take-off", other));
+      assertThat(texts(f)).as(closed).containsExactly(closed + " is capped");
+    }
+    PathFinding both = of(good().with("openings.take-off.outlet", "capped").with("openings.take-off.side-arm", "stoppered"));
+    assertThat(both.path()).isEqualTo(State.CLOSED);
+    assertThat(texts(both)).containsExactlyInAnyOrder("take-off.outlet is capped", "take-off.side-arm is stoppered");
+  }
+
+  @Test
+  void aKinkedHoseUnderLiquidDoesNotYieldToAPush() {
+    PathFinding f = of(hose("under-liquid"), COLD.saw(Look.HOSE, "kinked"));
+    assertThat(f.throughLiquid()).isEmpty();
+    assertThat(texts(f)).contains("vent-hose is kinked; has its end under liquid");
+  }
+
+  @Test
+  void aJointApartSomewhereMakesTheCountOfOpeningsUnknown() {
+    RigBuilder shut = jointed().with("take-off.side-arm", "stoppered");
+    assertThat(of(shut).countKnown()).isTrue();
+    assertThat(of(shut, COLD.sawApart("condenser")).countKnown()).isFalse();
+  }
+
+  @Test
+  void onePortUnderTwoNamesCountsByTheWorse() {
+    RigBuilder rig = good().unjoin("flask").with("openings.flask", "open").with("openings.flask.neck", "stoppered");
+    assertThat(of(rig).vents()).isEmpty();
+    RigBuilder pot = good().with("receiver.kind", "round-bottom-flask").with("receiver.gas-tight", "yes").quantity("receiver.necks", 2, Dimension.COUNT, "2");
+    PathFinding f = of(pot.join("take-off.outlet", "receiver.neck-1").with("take-off.side-arm", "stoppered").with("openings.receiver.neck-2", "open"));
+    assertThat(f.path()).isEqualTo(State.CLOSED);
+  }
+
+  @Test
+  void theTopOfACondenserIsAnExitUntilItIsSeenStoppered() {
+    RigBuilder rig = good().unjoin("head.side-arm").unjoin("condenser.lower").drop("take-off").join("head.side-arm", "condenser.lower");
+    rig.with("openings.condenser.upper", "open");
+    assertThat(of(rig).openExits()).containsExactly("condenser.upper");
+    PathFinding f = of(rig, COLD.saw(Look.CONDENSER_TOP, "stoppered"));
+    assertThat(texts(f)).containsExactly("condenser.upper is stoppered");
+  }
+
+  @Test
+  void aThroughWayOfUnknownGlassIsAskedFor() {
+    RigBuilder rig = good().unjoin("condenser.lower").part("bend", "unheard-of").join("condenser.lower", "bend").join("bend", "take-off.inlet");
+    assertThat(of(rig).path()).isEqualTo(State.UNKNOWN);
+    assertThat(of(rig).unknowns()).containsExactly("bend.kind");
+    RigBuilder named = good().unjoin("condenser.lower").part("bend", "unheard-of").join("condenser.lower", "bend.in").join("bend.out", "take-off.inlet");
+    assertThat(of(named).unknowns()).containsExactly("bend.kind");
+  }
 }
