@@ -98,7 +98,8 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
       List<Part> open = new ArrayList<>(take(Role.FLASK));
       settle(open, Role.FLASK, p -> leadsTo(p, Set.of("foot")));
       settle(open, Role.RECEIVER, p -> leadsTo(p, Set.of("outlet", "lower")));
-      settle(open, Role.FLASK, p -> any(p, BOILS));
+      boolean jointed = found.containsKey(Role.FLASK);
+      settle(open, Role.FLASK, p -> !jointed && any(p, BOILS));
       settle(open, Role.RECEIVER, p -> any(p, RECEIVES));
       // with a boiling flask found, any other stands by as a receiver; with none, nobody can say which of them boils
       settle(open, found.containsKey(Role.FLASK) ? Role.RECEIVER : Role.FLASK, p -> true);

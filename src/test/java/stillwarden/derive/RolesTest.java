@@ -97,4 +97,12 @@ class RolesTest {
     assertThat(r.absent()).isEmpty();
     assertThat(r.one(Role.CONDENSER)).isPresent();
   }
+
+  @Test
+  void theFlaskUnderTheClaisenBoilsWhateverTheKeysOfAnotherSay() {
+    RigBuilder rig = RigBuilder.good().without("flask.boiling-aid").without("flask.minimum-level").with("flask.tare", "212 g");
+    rig.part("pot", "round-bottom-flask", "boiling-aid", "fresh-stones");
+    assertThat(names(rig, Role.FLASK)).containsExactly("flask");
+    assertThat(names(rig, Role.RECEIVER)).containsExactlyInAnyOrder("receiver", "pot");
+  }
 }
