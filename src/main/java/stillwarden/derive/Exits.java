@@ -21,7 +21,7 @@ final class Exits {
       hoseEnd(part);
       return;
     }
-    boolean receives = graph.roles.is(part.name(), Role.RECEIVER);
+    boolean receives = graph.is(part.name(), Role.RECEIVER);
     if (receives && !graph.joined(part)) {
       return; // stands free: its mouth is no end of the chain of glass
     }
@@ -39,17 +39,17 @@ final class Exits {
   private Gate at(Part part, Port port) {
     List<Gate> said = new ArrayList<>();
     opening(port).ifPresent(said::add);
-    if (port.port().equals("side-arm") && graph.roles.is(part.name(), Role.TAKE_OFF)) {
+    if (port.port().equals("side-arm") && graph.is(part.name(), Role.TAKE_OFF)) {
       part.word("side-arm").map(w -> word(port, w)).ifPresent(said::add);
     }
-    if (port.port().equals("top") && graph.roles.is(part.name(), Role.RESERVOIR)) {
+    if (port.port().equals("top") && graph.is(part.name(), Role.RESERVOIR)) {
       said.add(stopper(part, port, !said.isEmpty()));
     }
-    if (port.port().equals("upper") && graph.roles.is(part.name(), Role.CONDENSER)) {
+    if (port.port().equals("upper") && graph.is(part.name(), Role.CONDENSER)) {
       graph.seen.word(Look.CONDENSER_TOP).map(w -> word(port, w)).ifPresent(said::add);
     }
     if (graph.isTip(port)) {
-      freeReceivers(port).ifPresent(said::add);
+      underTip(port).ifPresent(said::add);
     }
     return said.isEmpty() ? unlisted(part, port) : said.stream().reduce(Gate.OPEN, Gate::and);
   }
@@ -71,7 +71,7 @@ final class Exits {
   }
 
   private String path(Port port) {
-    return graph.roles.is(port.part(), Role.TAKE_OFF) && port.port().equals("side-arm") ? port.toString() : "openings." + graph.name(port);
+    return graph.is(port.part(), Role.TAKE_OFF) && port.port().equals("side-arm") ? port.toString() : "openings." + graph.name(port);
   }
 
   private Gate stopper(Part part, Port port, boolean alreadySaid) {
@@ -84,29 +84,32 @@ final class Exits {
   }
 
   /** With the receiver free the tip ends in the air. Of several receivers the file does not say which one stands there. */
-  private Optional<Gate> freeReceivers(Port tip) {
-    List<Part> free = graph.roles.all(Role.RECEIVER).stream().filter(r -> !graph.joined(r)).toList();
-    boolean tight = Passages.says(free, "gas-tight", "yes");
-    boolean loose = Passages.says(free, "gas-tight", "no") || Passages.says(free, "held", "free");
-    if (tight && free.size() > 1) {
-      return Optional.of(Gate.unknown(graph.name(tip), "may end in a gas-tight receiver", free.get(0).name() + ".gas-tight"));
+  private Optional<Gate> underTip(Port tip) {
+    List<Part> here = graph.roles.all(Role.RECEIVER).stream().filter(r -> !graph.joined(r)).toList();
+    List<Gate> each = here.stream().flatMap(r -> underTip(tip, r).stream()).toList();
+    boolean tight = each.stream().anyMatch(Gate::isClosed);
+    if (tight && here.size() > 1) {
+      return Optional.of(Gate.unknown(graph.name(tip), "may end in a gas-tight receiver", "path"));
     }
-    if (tight) {
-      return Optional.of(Gate.closed(graph.name(tip), "ends in `" + free.get(0).name() + "`, which is gas-tight"));
-    }
-    return loose ? Optional.of(Gate.OPEN) : jointed(tip, free);
+    return each.stream().reduce(Gate::and);
   }
 
-  private Optional<Gate> jointed(Port tip, List<Part> free) {
-    return free.stream()
-        .filter(r -> r.word("held").filter("jointed"::equals).isPresent())
-        .findFirst()
-        .map(r -> Gate.unknown(graph.name(tip), "may end in a gas-tight receiver: the joint is not listed", r.name() + ".gas-tight"));
+  /** A receiver with no joint listed; stated to be jointed nevertheless, it counts by its own vent. */
+  private Optional<Gate> underTip(Port tip, Part receiver) {
+    if (receiver.word("held").filter("jointed"::equals).isPresent()) {
+      return Optional.of(ownVent(receiver));
+    }
+    if (receiver.word("gas-tight").filter("yes"::equals).isPresent()) {
+      return Optional.of(Gate.closed(graph.name(tip), "ends in `" + receiver.name() + "`, which is gas-tight"));
+    }
+    return receiver.word("gas-tight").or(() -> receiver.word("held")).map(said -> Gate.OPEN);
   }
 
   /** "Nothing else on the bench" leaves no stopper that could be in it. */
   private Gate unlisted(Part part, Port port) {
-    graph.unlisted.add(port);
+    if (graph.hasRole(part.name())) {
+      graph.unlisted.add(port);
+    }
     return graph.rig.nothingElse() ? Gate.OPEN : Gate.unknown(graph.name(port), "is in no joint, and nobody said whether it is open", path(port));
   }
 
@@ -140,8 +143,16 @@ final class Exits {
     Port space = RigGraph.space(hose.name());
     long ends = graph.rig.joints().stream().filter(j -> j.a().part().equals(hose.name()) || j.b().part().equals(hose.name())).count();
     if (ends == 1) {
-      graph.exits.add(new RigGraph.Exit(space, end(hose), RigGraph.Kind.DESIGNED));
+      graph.exits.add(new RigGraph.Exit(space, end(hose), hangsDownstream(space)));
     }
+  }
+
+  /** A hose on a head or a flask is no designed way out. */
+  private RigGraph.Kind hangsDownstream(Port hose) {
+    return graph.reach(hose, e -> graph.downstream(e.a()) && graph.downstream(e.b())).stream()
+            .anyMatch(p -> !Passages.isThrough(graph.rig.parts().get(p.part())))
+        ? RigGraph.Kind.DESIGNED
+        : RigGraph.Kind.OTHER;
   }
 
   private Gate end(Part hose) {

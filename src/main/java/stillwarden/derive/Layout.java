@@ -5,12 +5,12 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.Deque;
 import java.util.HashMap;
-import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.Predicate;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import stillwarden.derive.PathFinding.Narrowest;
 import stillwarden.derive.PathFinding.Seal;
@@ -33,7 +33,8 @@ final class Layout {
 
   /** The arm whose joint leads to the reservoir without going back through the adapter. */
   Optional<String> feedArm() {
-    return graph.roles.one(Role.CLAISEN).flatMap(c -> carries(c, "straight") ? Optional.of("straight") : carries(c, "curved") ? Optional.of("side") : Optional.empty());
+    Optional<Part> claisen = graph.roles.one(Role.CLAISEN);
+    return claisen.filter(c -> carries(c, "straight")).map(c -> "straight").or(() -> claisen.filter(c -> carries(c, "curved")).map(c -> "side"));
   }
 
   private boolean carries(Part claisen, String arm) {
@@ -45,26 +46,30 @@ final class Layout {
 
   boolean feedCrosses() {
     Optional<Part> end = graph.roles.all(Role.TAKE_OFF).stream().findFirst().or(() -> graph.roles.all(Role.CONDENSER).stream().findFirst());
-    Set<String> vapour = end.map(e -> between(flask, RigGraph.space(e.name()), x -> true)).orElse(Set.of());
+    Set<String> vapour = end.map(e -> between(flask, RigGraph.space(e.name()))).orElse(Set.of());
     return graph.roles.all(Role.RESERVOIR).stream()
-        .flatMap(r -> between(flask, RigGraph.space(r.name()), x -> true).stream())
-        .filter(p -> !graph.roles.is(p, Role.FLASK) && !graph.roles.is(p, Role.CLAISEN))
+        .flatMap(r -> between(flask, RigGraph.space(r.name())).stream())
+        .filter(p -> !graph.is(p, Role.FLASK) && !graph.is(p, Role.CLAISEN))
         .anyMatch(vapour::contains);
   }
 
-  /** Parts on the shortest chain of joints from one space to another, both included; empty where there is none. */
-  private Set<String> between(Port from, Port to, Predicate<Edge> passes) {
+  private Set<String> between(Port from, Port to) {
+    return way(from, to, e -> true).stream().map(Port::part).collect(Collectors.toSet());
+  }
+
+  /** The shortest way from one node to another, both included; empty where there is none. */
+  private List<Port> way(Port from, Port to, Predicate<Edge> passes) {
     Map<Port, Port> before = new HashMap<>(Map.of(from, from));
     Deque<Port> queue = new ArrayDeque<>(List.of(from));
     while (!queue.isEmpty() && !before.containsKey(to)) {
       Port at = queue.remove();
       graph.edgesAt(at).filter(passes).map(e -> e.other(at)).filter(n -> before.putIfAbsent(n, at) == null).forEach(queue::add);
     }
-    Set<String> parts = new LinkedHashSet<>();
-    for (Port p = before.containsKey(to) ? to : from; !p.equals(from); p = before.get(p)) {
-      parts.add(p.part());
+    List<Port> way = new ArrayList<>();
+    for (Port p = before.containsKey(to) ? to : null; p != null; p = p.equals(from) ? null : before.get(p)) {
+      way.add(p);
     }
-    return parts;
+    return way;
   }
 
   /** Of the open ways the one whose narrowest place is widest; a way with a bore that nobody stated counts only if all have one. */
@@ -75,32 +80,35 @@ final class Layout {
   }
 
   private Optional<Narrowest> along(Exit exit) {
-    Set<String> parts = openWay(exit.at());
-    List<String> paths = Stream.concat(parts.stream().flatMap(p -> bore(p).stream()), exitBore(exit).stream()).toList();
-    List<String> missing = paths.stream().filter(p -> graph.rig.si(p).isEmpty()).toList();
-    return paths.stream()
-        .filter(p -> graph.rig.si(p).isPresent())
-        .map(p -> new Narrowest(graph.rig.si(p).orElseThrow(), p, missing))
+    List<String> bores = way(flask, exit.at(), e -> e.gate().isOpen()).stream().flatMap(this::bores).distinct().toList();
+    List<String> missing = bores.stream().filter(b -> graph.rig.si(b).isEmpty()).toList();
+    return bores.stream()
+        .filter(b -> graph.rig.si(b).isPresent())
+        .map(b -> new Narrowest(graph.rig.si(b).orElseThrow(), b, missing))
         .min(Comparator.comparing(Narrowest::metres));
   }
 
-  private Set<String> openWay(Port to) {
-    return between(flask, to, e -> e.gate().isOpen());
+  /** Rig paths of the bores at one node; a take-off's outlet has one that no key states, so it stands for itself. */
+  private Stream<String> bores(Port node) {
+    boolean takeOff = graph.is(node.part(), Role.TAKE_OFF);
+    if (takeOff && node.port().equals("side-arm")) {
+      return Stream.concat(Stream.of(node + "-bore"), tubes());
+    }
+    if (takeOff && node.port().equals("outlet")) {
+      return Stream.of(graph.name(node));
+    }
+    return node.port().isEmpty() ? graph.role(node.part()).map(BORES::get).map(k -> node.part() + "." + k).stream() : Stream.empty();
   }
 
-  private Optional<String> bore(String part) {
-    return graph.roles.of(part).map(BORES::get).map(key -> part + "." + key);
-  }
-
-  /** A side arm or a free outlet has a bore of its own; only the side arm's has a key. */
-  private Optional<String> exitBore(Exit exit) {
-    return graph.roles.is(exit.at().part(), Role.TAKE_OFF) ? Optional.of(exit.at() + "-bore") : Optional.empty();
+  /** Hoses in no joint: they hang on the side arm that ends in a tube. */
+  private Stream<String> tubes() {
+    return graph.roles.all(Role.VENT_HOSE).stream().filter(h -> !graph.joined(h)).map(h -> h.name() + ".bore");
   }
 
   List<String> unreached(Set<Port> linked) {
     return graph.rig.parts().values().stream()
         .filter(p -> Passages.holdsVapour(p.kind()) && !linked.contains(RigGraph.space(p.name())))
-        .filter(p -> !graph.roles.is(p.name(), Role.RECEIVER) && !endsTube(p) && graph.roles.of(p.name()).isPresent())
+        .filter(p -> !graph.is(p.name(), Role.RECEIVER) && graph.hasRole(p.name()) && !endsTube(p))
         .map(Part::name)
         .toList();
   }
@@ -111,11 +119,9 @@ final class Layout {
   }
 
   List<Seal> seals() {
-    Stream<RigGraph.Exit> ends = graph.exits.stream().filter(e -> e.gate().liquid());
-    List<Seal> out = new ArrayList<>();
-    graph.edges.stream().filter(e -> e.tip() && e.gate().liquid()).map(Edge::gate).forEach(g -> out.add(seal(g)));
-    ends.forEach(e -> out.add(seal(e.gate())));
-    return out;
+    Stream<Gate> tips = graph.edges.stream().filter(Edge::tip).map(Edge::gate);
+    Stream<Gate> ends = graph.exits.stream().map(Exit::gate);
+    return Stream.concat(tips, ends).filter(Gate::liquid).map(this::seal).toList();
   }
 
   private Seal seal(Gate gate) {

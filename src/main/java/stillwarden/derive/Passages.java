@@ -44,6 +44,11 @@ final class Passages {
     return THROUGH.contains(kind) || !portsOfKind(kind).isEmpty();
   }
 
+  /** What fills the port that it is put into. */
+  static boolean isSolid(String kind) {
+    return SOLID.contains(kind);
+  }
+
   /** A flask with several necks has {@code neck-1} and so on, as many as stated; with no number, those that are named. */
   static List<String> portsOf(Part part, boolean named) {
     List<String> own = portsOfKind(part.kind());
@@ -73,10 +78,10 @@ final class Passages {
   }
 
   private Gate solids(Part part, Port port) {
-    if (graph.roles.is(part.name(), Role.CONDENSER) && port.port().equals("lower")) {
+    if (graph.is(part.name(), Role.CONDENSER) && port.port().equals("lower")) {
       return solids(part, Look.CONDENSER_SOLIDS);
     }
-    boolean takeOff = graph.roles.is(part.name(), Role.TAKE_OFF) && port.port().equals("inlet");
+    boolean takeOff = graph.is(part.name(), Role.TAKE_OFF) && port.port().equals("inlet");
     return takeOff ? solids(part, Look.TAKE_OFF_SOLIDS) : Gate.OPEN;
   }
 
@@ -90,8 +95,8 @@ final class Passages {
 
   /** Foam or plant in the head closes nothing for sure and leaves nothing proven open. */
   private Gate foam(Part part, Port port) {
-    boolean head = graph.roles.is(part.name(), Role.HEAD) && port.port().equals("side-arm");
-    boolean headless = graph.roles.all(Role.HEAD).isEmpty() && graph.roles.is(part.name(), Role.CONDENSER);
+    boolean head = graph.is(part.name(), Role.HEAD) && port.port().equals("side-arm");
+    boolean headless = graph.roles.all(Role.HEAD).isEmpty() && graph.is(part.name(), Role.CONDENSER);
     if (!head && !(headless && port.port().equals("upper"))) {
       return Gate.OPEN;
     }
@@ -176,9 +181,9 @@ final class Passages {
 
   private Gate side(Port p) {
     Part part = graph.rig.parts().get(p.part());
-    if (part == null || (!holdsVapour(part.kind()) && !SOLID.contains(part.kind()))) {
+    if (part == null || (!holdsVapour(part.kind()) && !isSolid(part.kind()))) {
       return Gate.unknown(p.toString(), "is no glass that is described", p.part() + ".kind");
     }
-    return SOLID.contains(part.kind()) ? Gate.plugged(p.toString(), "fills the port") : isThrough(part) ? Exits.bore(graph, part) : Gate.OPEN;
+    return isSolid(part.kind()) ? Gate.plugged(p.toString(), "fills the port") : isThrough(part) ? Exits.bore(graph, part) : Gate.OPEN;
   }
 }

@@ -3,6 +3,7 @@ package stillwarden.derive;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -52,6 +53,7 @@ final class RigGraph {
   /** Edges looked at by all searches so far: the measure of work that the tests bound. */
   long work;
 
+  private final Map<String, Role> roleOf = new HashMap<>();
   private final Map<Port, List<Edge>> byNode = new LinkedHashMap<>();
   private final Map<Port, String> names = new LinkedHashMap<>();
   private final Set<Port> joined = new LinkedHashSet<>();
@@ -60,6 +62,7 @@ final class RigGraph {
     this.rig = rig;
     this.roles = Roles.of(rig);
     this.seen = seen;
+    roles.parts().forEach((role, parts) -> parts.forEach(p -> roleOf.put(p.name(), role)));
     rig.joints().forEach(this::remember);
     rig.openings().keySet().forEach(p -> names.putIfAbsent(canonical(p), p.toString()));
     Passages passages = new Passages(this);
@@ -123,18 +126,31 @@ final class RigGraph {
     return j.a().part().equals(part) || j.b().part().equals(part);
   }
 
+  Optional<Role> role(String part) {
+    return Optional.ofNullable(roleOf.get(part));
+  }
+
+  boolean hasRole(String part) {
+    return roleOf.containsKey(part);
+  }
+
+  boolean is(String part, Role role) {
+    return roleOf.get(part) == role;
+  }
+
   Kind kind(Port p) {
-    Optional<Role> role = roles.of(p.part());
-    return role.filter(Role.RESERVOIR::equals).isPresent()
-        ? Kind.FEED
-        : role.filter(DOWNSTREAM::contains).isPresent() ? Kind.DESIGNED : Kind.OTHER;
+    return downstream(p) ? Kind.DESIGNED : is(p.part(), Role.RESERVOIR) ? Kind.FEED : Kind.OTHER;
+  }
+
+  boolean downstream(Port p) {
+    return role(p.part()).filter(DOWNSTREAM::contains).isPresent();
   }
 
   /** The delivery tip: the take-off's outlet, or without a take-off the condenser's own lower end. */
   boolean isTip(Port port) {
-    return roles.is(port.part(), Role.TAKE_OFF)
+    return is(port.part(), Role.TAKE_OFF)
         ? port.port().equals("outlet")
-        : roles.all(Role.TAKE_OFF).isEmpty() && roles.is(port.part(), Role.CONDENSER) && port.port().equals("lower");
+        : roles.all(Role.TAKE_OFF).isEmpty() && is(port.part(), Role.CONDENSER) && port.port().equals("lower");
   }
 
   /** A single port named by its part alone gets its name; a round-bottom flask has a neck, receiver or not. */
@@ -145,14 +161,14 @@ final class RigGraph {
     return own.size() == 1 && (p.port().isEmpty() || alias) ? new Port(p.part(), own.get(0)) : p;
   }
 
-  /** Ports of a part: those of its kind and those that the file names besides. */
+  /** Ports of a part: those of its kind and those that the file names besides; glass of an unknown kind has the latter. */
   Set<Port> ports(Part part) {
     Set<Port> out = new LinkedHashSet<>();
     names.keySet().stream().filter(p -> p.part().equals(part.name()) && !p.port().isEmpty()).forEach(out::add);
     for (String own : Passages.portsOf(part, !out.isEmpty())) {
       out.add(new Port(part.name(), own));
     }
-    return Passages.holdsVapour(part.kind()) ? out : Set.of();
+    return Passages.isSolid(part.kind()) ? Set.of() : out;
   }
 
   String name(Port p) {
@@ -172,7 +188,9 @@ final class RigGraph {
   }
 
   Stream<Edge> edgesAt(Port node) {
-    return byNode.getOrDefault(node, List.of()).stream();
+    List<Edge> at = byNode.getOrDefault(node, List.of());
+    work += at.size();
+    return at.stream();
   }
 
   boolean holdsVapour(Port p) {
@@ -190,12 +208,7 @@ final class RigGraph {
     Deque<Port> queue = new ArrayDeque<>(found);
     while (!queue.isEmpty()) {
       Port at = queue.remove();
-      for (Edge e : byNode.getOrDefault(at, List.of())) {
-        work++;
-        if (passes.test(e) && found.add(e.other(at))) {
-          queue.add(e.other(at));
-        }
-      }
+      edgesAt(at).filter(passes).map(e -> e.other(at)).filter(found::add).forEach(queue::add);
     }
     return found;
   }

@@ -1,6 +1,8 @@
 package stillwarden.derive;
 
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 
@@ -29,6 +31,14 @@ public enum Role {
   public static final List<Role> IN_FLASK =
       List.of(HEATER, FLASK, CLAISEN, RESERVOIR, HEAD, THERMOMETER, CONDENSER, TAKE_OFF, RECEIVER);
 
+  private static final Map<String, Role> BY_KIND = new HashMap<>();
+
+  static {
+    for (Role r : values()) {
+      r.kinds.forEach(k -> BY_KIND.put(k, r));
+    }
+  }
+
   private final String word;
   private final Set<String> kinds;
 
@@ -44,7 +54,7 @@ public enum Role {
 
   /** The role that a kind has when nothing else decides. */
   static Optional<Role> ofKind(String kind) {
-    return List.of(values()).stream().filter(r -> r.kinds.contains(kind)).findFirst();
+    return Optional.ofNullable(BY_KIND.get(kind));
   }
 
   /** The role that a name suggests ({@code condenser-2}, {@code claisen-adapter}): the only hint where the kind is {@code none}. */

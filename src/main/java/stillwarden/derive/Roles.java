@@ -4,12 +4,14 @@ import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
 import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.Predicate;
+import java.util.stream.Stream;
 import stillwarden.describe.Joint;
 import stillwarden.describe.Part;
 import stillwarden.describe.Port;
@@ -48,19 +50,16 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
     return all(role).size() == 1 ? Optional.of(all(role).get(0)) : Optional.empty();
   }
 
+  /** The role of a part by its name. */
   public Optional<Role> of(String partName) {
     return parts.keySet().stream().filter(r -> all(r).stream().anyMatch(p -> p.name().equals(partName))).findFirst();
-  }
-
-  boolean is(String partName, Role role) {
-    return all(role).stream().anyMatch(p -> p.name().equals(partName));
   }
 
   /** Works one rig out; thrown away afterwards. */
   private static final class Sorter {
     private final Rig rig;
     private final Map<Role, List<Part>> found = new EnumMap<>(Role.class);
-    private final List<Role> absent = new ArrayList<>();
+    private final Set<Role> absent = EnumSet.noneOf(Role.class);
     private final List<Part> others = new ArrayList<>();
 
     Sorter(Rig rig) {
@@ -72,8 +71,9 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
       flasks();
       funnels();
       jacks();
+      absent.removeAll(found.keySet());
       List<Role> missing = Role.IN_FLASK.stream().filter(r -> !found.containsKey(r) && !absent.contains(r)).toList();
-      return new Roles(found, missing, absent, others);
+      return new Roles(found, missing, List.copyOf(absent), others);
     }
 
     private void byKind(Part p) {
@@ -96,9 +96,10 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
     /** A round-bottom flask boils or receives: the joints tell, then its keys, then what is left over. */
     private void flasks() {
       List<Part> open = new ArrayList<>(take(Role.FLASK));
-      settle(open, Role.RECEIVER, p -> leadsTo(p, Set.of("outlet", "lower")));
       settle(open, Role.FLASK, p -> leadsTo(p, Set.of("foot")));
-      settle(open, Role.FLASK, p -> any(p, BOILS));
+      settle(open, Role.RECEIVER, p -> leadsTo(p, Set.of("outlet", "lower")));
+      boolean jointed = found.containsKey(Role.FLASK);
+      settle(open, Role.FLASK, p -> !jointed && any(p, BOILS));
       settle(open, Role.RECEIVER, p -> any(p, RECEIVES));
       // with a boiling flask found, any other stands by as a receiver; with none, nobody can say which of them boils
       settle(open, found.containsKey(Role.FLASK) ? Role.RECEIVER : Role.FLASK, p -> true);
@@ -167,7 +168,7 @@ public record Roles(Map<Role, List<Part>> parts, List<Role> missing, List<Role> 
       return standing(what).anyMatch(jack.name()::equals);
     }
 
-    private java.util.stream.Stream<String> standing(Role what) {
+    private Stream<String> standing(Role what) {
       return found.getOrDefault(what, List.of()).stream().flatMap(p -> p.word("stands-on").stream());
     }
   }

@@ -1,6 +1,6 @@
 package stillwarden.derive;
 
-import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
@@ -25,6 +25,7 @@ public final class VapourPath {
   private final Port flask;
   private final Set<Port> sure;
   private final Set<Port> may;
+  private final Set<Port> pushed;
   private final Set<Port> linked;
 
   private VapourPath(RigGraph graph, Port flask) {
@@ -32,6 +33,7 @@ public final class VapourPath {
     this.flask = flask;
     this.sure = graph.reach(flask, e -> e.gate().isOpen());
     this.may = graph.reach(flask, e -> e.gate().mayPass());
+    this.pushed = graph.reach(flask, e -> e.gate().yields());
     this.linked = graph.reach(flask, e -> true);
   }
 
@@ -50,7 +52,7 @@ public final class VapourPath {
   private static PathFinding noFlask(RigGraph graph) {
     List<String> which = graph.roles.all(Role.FLASK).stream().map(p -> p.name() + ".boiling-aid").toList();
     return new PathFinding(
-        State.UNKNOWN, List.of(), List.of(), which.isEmpty() ? List.of("parts.flask") : which, List.of(), List.of(), false,
+        State.UNKNOWN, List.of(), List.of(), which.isEmpty() ? List.of("flask.kind") : which, List.of(), List.of(), false,
         Optional.empty(), Relief.UNKNOWN, false, Optional.empty(), false, Optional.empty(), List.of(), graph.unlisted, List.of());
   }
 
@@ -59,7 +61,7 @@ public final class VapourPath {
     List<Exit> designed = open.stream().filter(e -> e.kind() == Kind.DESIGNED).toList();
     State state = state(designed);
     List<Port> vents = open.stream().map(Exit::at).distinct().toList();
-    List<Port> pushed = throughLiquid(vents);
+    List<Port> throughLiquid = throughLiquid(vents);
     Layout layout = new Layout(graph, flask);
     return new PathFinding(
         state,
@@ -67,9 +69,9 @@ public final class VapourPath {
         closures(state),
         state == State.UNKNOWN ? deciding() : List.of(),
         vents,
-        pushed,
+        throughLiquid,
         !graph.leakSomewhere && exits(may, Gate::mayPass).map(Exit::at).distinct().count() == vents.size(),
-        last(vents, pushed),
+        last(vents, throughLiquid),
         relief(),
         inletUpstream(),
         layout.narrowest(designed),
@@ -92,84 +94,86 @@ public final class VapourPath {
     return maybe || !looseEnds().isEmpty() ? State.UNKNOWN : State.CLOSED;
   }
 
+  private boolean leadsOn() {
+    return graph.exits.stream().anyMatch(e -> e.kind() == Kind.DESIGNED && linked.contains(e.at()));
+  }
+
   /** Where no joint leads on to a designed exit at all, an unlisted port may still be joined to something not in the file. */
   private List<Exit> looseEnds() {
-    boolean leadsOn = graph.exits.stream().anyMatch(e -> e.kind() == Kind.DESIGNED && linked.contains(e.at()));
-    return leadsOn ? List.of() : exits(may, Gate::isUnknown).filter(e -> e.kind() == Kind.OTHER).toList();
+    return leadsOn() ? List.of() : exits(may, Gate::isUnknown).filter(e -> e.kind() == Kind.OTHER).toList();
   }
 
-  /** The unknown gates on some way that may lead to a designed exit. */
+  /** What would tell about the unknown gates on some way that may lead to a designed exit. */
   private List<String> deciding() {
-    List<Exit> ends = new ArrayList<>(exits(may, Gate::mayPass).filter(e -> e.kind() == Kind.DESIGNED).toList());
-    ends.addAll(looseEnds());
+    List<Exit> ends = Stream.concat(exits(may, Gate::mayPass).filter(e -> e.kind() == Kind.DESIGNED), looseEnds().stream()).toList();
     Set<Port> back = graph.reach(ends.stream().map(Exit::at).toList(), e -> e.gate().mayPass());
-    Stream<Gate> between =
-        graph.edges.stream().filter(e -> back.contains(e.a()) && back.contains(e.b()) && onWay(e)).map(Edge::gate);
-    return Stream.concat(between, ends.stream().map(Exit::gate)).flatMap(g -> g.looks().stream()).distinct().toList();
+    List<Edge> unknown = graph.edges.stream().filter(e -> e.gate().isUnknown() && back.contains(e.a()) && back.contains(e.b())).toList();
+    List<String> looks = looks(unknown.stream().filter(e -> !feeds(e)).map(Edge::gate), ends);
+    return looks.isEmpty() ? looks(unknown.stream().map(Edge::gate), ends) : looks;
   }
 
-  private boolean onWay(Edge e) {
-    return e.gate().isUnknown() && designed(e);
+  private static List<String> looks(Stream<Gate> inside, List<Exit> ends) {
+    return Stream.concat(inside, ends.stream().map(Exit::gate)).flatMap(g -> g.looks().stream()).distinct().toList();
   }
 
-  /** Neither end belongs to the reservoir, which is no part of the designed way. */
-  private boolean designed(Edge e) {
-    return graph.kind(e.a()) != Kind.FEED && graph.kind(e.b()) != Kind.FEED;
+  /** The reservoir is no part of the designed way, unless nothing else leads on. */
+  private boolean feeds(Edge e) {
+    return graph.kind(e.a()) == Kind.FEED || graph.kind(e.b()) == Kind.FEED;
   }
 
   private List<Closure> closures(State state) {
     Set<Closure> out = new LinkedHashSet<>();
-    for (Edge e : graph.edges) {
-      if (e.gate().isClosed() && linked.contains(e.a()) && designed(e) && leadsOn(e)) {
-        out.add(closure(e.gate(), may.contains(e.a()) || may.contains(e.b())));
-      }
+    closed().filter(e -> !feeds(e)).forEach(e -> out.add(closure(e)));
+    exits(linked, Gate::isClosed)
+        .filter(e -> e.kind() == Kind.DESIGNED)
+        .forEach(e -> out.add(closure(e.gate(), may.contains(e.at()))));
+    if (state == State.CLOSED && out.stream().noneMatch(Closure::nearest) && leadsOn()) {
+      closed().forEach(e -> out.add(closure(e)));
     }
-    for (Exit e : graph.exits) {
-      if (e.gate().isClosed() && e.kind() == Kind.DESIGNED && linked.contains(e.at())) {
-        out.add(closure(e.gate(), may.contains(e.at())));
-      }
-    }
-    if (out.isEmpty() && state == State.CLOSED) {
+    if (state == State.CLOSED && out.stream().noneMatch(Closure::nearest)) {
       out.add(new Closure(lastOfChain(), "leads on to no exit: the joint is missing", true, true));
     }
-    return out.stream().sorted((x, y) -> Boolean.compare(y.nearest(), x.nearest())).toList();
+    return out.stream().sorted(Comparator.comparing(Closure::nearest).reversed()).toList();
+  }
+
+  /** A port filled by a thermometer is meant to be closed and ends no way. */
+  private Stream<Edge> closed() {
+    return graph.edges.stream()
+        .filter(e -> e.gate().isClosed() && linked.contains(e.a()) && graph.holdsVapour(e.a()) && graph.holdsVapour(e.b()));
+  }
+
+  private Closure closure(Edge e) {
+    return closure(e.gate(), may.contains(e.a()) || may.contains(e.b()));
   }
 
   private static Closure closure(Gate g, boolean nearest) {
     return new Closure(g.what(), g.why(), g.handsCold(), nearest);
   }
 
-  /** A port filled by a thermometer is closed for good and ends no way. */
-  private boolean leadsOn(Edge e) {
-    return graph.holdsVapour(e.a()) && graph.holdsVapour(e.b());
-  }
-
   private String lastOfChain() {
-    return linked.stream().filter(p -> p.port().isEmpty()).reduce(flask, (first, next) -> next).part();
+    return linked.stream().filter(p -> graph.holdsVapour(p) && graph.kind(p) != Kind.FEED).reduce(flask, (first, next) -> next).part();
   }
 
   /** Exits that a push would open by moving liquid, over and above those that vent freely. */
   private List<Port> throughLiquid(List<Port> vents) {
-    Set<Port> pushed = graph.reach(flask, e -> e.gate().yields());
     return exits(pushed, Gate::yields).map(Exit::at).distinct().filter(p -> !vents.contains(p)).toList();
   }
 
-  private static Optional<Port> last(List<Port> vents, List<Port> pushed) {
-    List<Port> left = vents.isEmpty() ? pushed : vents;
+  private static Optional<Port> last(List<Port> vents, List<Port> throughLiquid) {
+    List<Port> left = vents.isEmpty() ? throughLiquid : vents;
     return left.size() == 1 ? Optional.of(left.get(0)) : Optional.empty();
   }
 
   private Relief relief() {
-    Set<Port> pushed = graph.reach(flask, e -> e.gate().yields());
     Set<Port> perhaps = graph.reach(flask, e -> e.gate().mayPass() || e.gate().liquid());
-    return feeds(sure, Gate::isOpen)
+    return ventsByReservoir(sure, Gate::isOpen)
         ? Relief.FREE
-        : feeds(pushed, Gate::yields)
+        : ventsByReservoir(pushed, Gate::yields)
             ? Relief.THROUGH_LIQUID
-            : feeds(perhaps, g -> g.mayPass() || g.liquid()) ? Relief.UNKNOWN : Relief.NONE;
+            : ventsByReservoir(perhaps, g -> g.mayPass() || g.liquid()) ? Relief.UNKNOWN : Relief.NONE;
   }
 
-  private boolean feeds(Set<Port> reached, Predicate<Gate> gate) {
+  private boolean ventsByReservoir(Set<Port> reached, Predicate<Gate> gate) {
     return exits(reached, gate).anyMatch(e -> e.kind() == Kind.FEED);
   }
 
