@@ -1,0 +1,171 @@
+package stillwarden.derive.physics;
+
+import java.time.Instant;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import stillwarden.describe.Part;
+
+/**
+ * Where the run stands now, by the last looks carried forward with the boil-up rate.
+ *
+ * @param heatLeft seconds until it boils: from heat-on before the run, 0 once boiling was seen
+ * @param heatUp the whole heat-up, s
+ * @param flask level of water and solids, m3
+ * @param reservoir m3
+ * @param receiver m3 in the receiver now
+ * @param collected m3 over since the start
+ * @param leak what it could mean that more water is gone than the power could boil
+ */
+record Progress(
+    Optional<Band> heatLeft,
+    Optional<Band> heatUp,
+    Optional<Instant> boilsFrom,
+    Optional<Band> flask,
+    Optional<Band> reservoir,
+    Optional<Band> receiver,
+    Optional<Band> collected,
+    Optional<String> leak) {
+
+  static Progress of(Bench b, Optional<BoilUp> rate) {
+    Optional<Band> heatUp = heatUp(b);
+    Optional<Instant> boils = boilsFrom(b, heatUp);
+    Optional<Band> wait = wait(b, heatUp);
+    Optional<Band> collected = collected(b, rate, boils);
+    return new Progress(wait, heatUp, boils, flask(b, rate, boils), reservoir(b), receiver(b, rate, boils, collected), collected, leak(b, heatUp, collected));
+  }
+
+  private static Optional<Band> heatUp(Bench b) {
+    if (b.heat.isEmpty() || b.charge.water().isEmpty()) {
+      return Optional.empty();
+    }
+    Heat h = b.heat.get();
+    // the loss grows from nought to its full value on the way up
+    Band into = h.full().times(h.setting()).times(h.efficiency()).minus(h.loss().times(0.5));
+    if (into.nominal() <= 0) {
+      return Optional.empty();
+    }
+    Band slow = new Band(Math.max(into.low(), into.nominal() * 0.2), into.nominal(), into.high());
+    return Optional.of(Heat.capacity(b.charge, b.charge.water().get(), b.volume).times(Math.max(0, b.boiling() - b.room)).over(slow));
+  }
+
+  private static Optional<Instant> boilsFrom(Bench b, Optional<Band> heatUp) {
+    RunState run = b.run;
+    if (run.boilingSince().isPresent() || run.heatSince().isEmpty() || heatUp.isEmpty()) {
+      return run.boilingSince();
+    }
+    return Optional.of(run.heatSince().get().plusMillis((long) (1000 * heatUp.get().nominal())));
+  }
+
+  private static Optional<Band> wait(Bench b, Optional<Band> heatUp) {
+    if (b.run.boilingSince().isPresent()) {
+      return Optional.of(Band.of(0));
+    }
+    double gone = b.run.heatSince().map(b.run::secondsSince).orElse(0.0);
+    return heatUp.map(h -> h.minus(Band.of(gone)).atLeast(0));
+  }
+
+  /** Seconds of boiling between an earlier look and now, or until the heat was cut. */
+  private static double boiledSince(Bench b, Optional<Instant> boils, Instant look) {
+    if (boils.isEmpty() || b.run.at() == null) {
+      return 0;
+    }
+    Instant end = b.run.heatOn() ? b.run.at() : b.run.settingSince().orElse(b.run.at());
+    Instant from = boils.get().isAfter(look) ? boils.get() : look;
+    return Math.max(0, (end.toEpochMilli() - from.toEpochMilli()) / 1000.0);
+  }
+
+  private static Optional<Band> flask(Bench b, Optional<BoilUp> rate, Optional<Instant> boils) {
+    Optional<Band> start = b.charge.water().map(w -> Band.of(w).plus(b.charge.displaced()));
+    if (b.run.flask().isPresent() && b.volume.isPresent()) {
+      RunState.Look look = b.run.flask().get();
+      Optional<Band> seen = look.volume().isPresent()
+          ? look.volume().map(v -> read(v, b.volume.get()))
+          : Levels.flask(look.word(), b.volume.get(), b.minimumLevel(b.volume.get()), b.policy);
+      return seen.map(s -> s.plus(Band.of(b.run.fedSince(look.at()))).minus(boiled(b, rate, boils, look.at())).atLeast(0));
+    }
+    if (!b.run.started()) {
+      return start;
+    }
+    Instant from = b.run.heatSince().orElse(b.run.at());
+    return start.map(s -> s.plus(Band.of(b.run.fed())).minus(boiled(b, rate, boils, from)).atLeast(0));
+  }
+
+  private static Band boiled(Bench b, Optional<BoilUp> rate, Optional<Instant> boils, Instant since) {
+    double seconds = boiledSince(b, boils, since);
+    return rate.map(r -> r.cubicMetres().times(r.waterShare() * seconds)).orElse(Band.of(0));
+  }
+
+  private static Band read(double volume, double vessel) {
+    double error = Limits.value("level-reading-error") * vessel;
+    return new Band(Math.max(0, volume - error), volume, volume + error);
+  }
+
+  private static Optional<Band> reservoir(Bench b) {
+    Optional<Part> part = Roles.reservoir(b.rig);
+    Optional<Double> size = part.flatMap(p -> p.si("volume"));
+    if (b.run.reservoir().isPresent()) {
+      RunState.Look look = b.run.reservoir().get();
+      Optional<Band> seen = look.volume().map(Band::of).or(() -> size.flatMap(v -> Levels.reservoir(look.word(), v)));
+      return seen.map(s -> s.minus(Band.of(b.run.fedSince(look.at()))).atLeast(0));
+    }
+    return part.flatMap(p -> p.si("water")).map(w -> Band.of(w).minus(Band.of(b.run.fed())).atLeast(0));
+  }
+
+  private static Optional<Band> receiver(Bench b, Optional<BoilUp> rate, Optional<Instant> boils, Optional<Band> collected) {
+    Optional<Double> size = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    if (b.run.receiver().isPresent()) {
+      RunState.Look look = b.run.receiver().get();
+      Optional<Band> seen = look.volume().isPresent()
+          ? look.volume().map(v -> v == 0 ? Band.of(0) : read(v, size.orElse(v)))
+          : size.flatMap(v -> Levels.receiver(look.word(), v));
+      double seconds = boiledSince(b, boils, look.at());
+      return seen.map(s -> rate.map(r -> s.plus(r.cubicMetres().times(seconds))).orElse(s));
+    }
+    return collected.map(c -> c.minus(Band.of(b.run.swapped())).atLeast(0));
+  }
+
+  private static Optional<Band> collected(Bench b, Optional<BoilUp> rate, Optional<Instant> boils) {
+    if (!b.run.started()) {
+      return Optional.of(Band.of(0));
+    }
+    List<RunState.Amount> readings = b.run.collected();
+    if (!readings.isEmpty()) {
+      RunState.Amount last = readings.get(readings.size() - 1);
+      double seconds = boiledSince(b, boils, last.at());
+      Band seen = Band.of(last.volume());
+      return Optional.of(rate.map(r -> seen.plus(r.cubicMetres().times(seconds))).orElse(seen));
+    }
+    Instant from = b.run.heatSince().orElse(b.run.at());
+    return rate.map(r -> r.cubicMetres().times(boiledSince(b, boils, from)).plus(Band.of(0)));
+  }
+
+  /** More water gone than the power could have boiled is a leak, a wrong entry or a wrong rig file. */
+  private static Optional<String> leak(Bench b, Optional<Band> heatUp, Optional<Band> collected) {
+    if (b.run.flask().isEmpty() || b.volume.isEmpty() || b.heat.isEmpty() || b.charge.water().isEmpty() || b.run.heatSince().isEmpty()) {
+      return Optional.empty();
+    }
+    RunState.Look look = b.run.flask().get();
+    Band error = Band.of(Limits.value("level-reading-error") * b.volume.get());
+    Optional<Band> seen = look.volume().map(Band::of).or(() -> Levels.flask(look.word(), b.volume.get(), b.minimumLevel(b.volume.get()), b.policy));
+    if (seen.isEmpty()) {
+      return Optional.empty();
+    }
+    double fed = b.run.fed() - b.run.fedSince(look.at());
+    double gone = b.charge.water().get() + b.charge.displaced().low() + fed - b.charge.uptake().high() - seen.get().high() - error.high();
+    double most = b.heat.get().full().high() * seconds(b, heatUp, look.at()) / WaterSteam.latentHeat(b.boiling()) / 958;
+    if (gone <= most) {
+      return Optional.empty();
+    }
+    List<String> why = new ArrayList<>();
+    boolean cameOver = collected.filter(c -> !b.run.collected().isEmpty() && c.high() >= 0.8 * gone).isPresent();
+    why.add(String.format(java.util.Locale.ROOT, "%.0f mL are gone from the flask, the heater could have boiled at most %.0f mL", gone * 1e6, most * 1e6));
+    why.add(cameOver ? "as much came over: the power in the rig file or the time of heat-on is wrong" : "not in the receiver: a leak or a wrong entry");
+    return Optional.of(String.join("; ", why));
+  }
+
+  private static double seconds(Bench b, Optional<Band> heatUp, Instant look) {
+    Instant start = b.run.boilingSince().orElseGet(() -> b.run.heatSince().get().plusMillis((long) (1000 * heatUp.map(Band::low).orElse(0.0))));
+    return Math.max(0, (look.toEpochMilli() - start.toEpochMilli()) / 1000.0);
+  }
+}
