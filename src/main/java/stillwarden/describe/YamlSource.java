@@ -109,6 +109,7 @@ final class YamlSource {
       Node key = node(e, depth + 1);
       Node value = node(events.next(), depth + 1);
       Fields.add(fields, key, value, start.isFlow(), defects);
+      limits.entries(fields.size(), spot(start));
     }
     return Node.map(List.copyOf(fields), spot(start), start.isFlow());
   }
@@ -117,6 +118,7 @@ final class YamlSource {
     List<Node> items = new ArrayList<>();
     for (Event e = events.next(); e.getEventId() != Event.ID.SequenceEnd; e = events.next()) {
       items.add(node(e, depth + 1));
+      limits.entries(items.size(), spot(start));
     }
     return Node.list(List.copyOf(items), spot(start), start.isFlow());
   }

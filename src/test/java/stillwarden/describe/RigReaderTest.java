@@ -177,6 +177,26 @@ class RigReaderTest {
   }
 
   @Test
+  void manyKeysAreRefusedBeforeTheyCost() throws Exception {
+    StringBuilder keys = new StringBuilder("parts:\n");
+    for (int i = 0; i < 20_000; i++) {
+      keys.append("  p").append(i).append(": 1\n");
+    }
+    assertThat(refused(keys.toString())).contains("more than 1000 entries");
+    StringBuilder json = new StringBuilder("{\"format\":\"stillwarden/rig/1\",\"joints\":[0");
+    assertThat(refused(file("t.rig.json", json.append(",0".repeat(2000)).append("]}").toString()))).contains("more than 1000 entries");
+  }
+
+  @Test
+  void noMoreThanTwoHundredDefectsAreTold() throws Exception {
+    StringBuilder keys = new StringBuilder();
+    for (int i = 0; i < 900; i++) {
+      keys.append("k").append(i).append(": 1\n");
+    }
+    assertThat(refused(keys.toString()).lines()).hasSize(200);
+  }
+
+  @Test
   void aByteOrderMarkAndWindowsLineEndsAreTaken() throws Exception {
     assertThat(read("\uFEFF" + HEAD.replace("\n", "\r\n") + "name: Bench\r\n").name()).isEqualTo("Bench");
   }
