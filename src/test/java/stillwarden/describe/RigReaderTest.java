@@ -285,6 +285,27 @@ class RigReaderTest {
   }
 
   @Test
+  void whatStandsFreeIsInNoJoint() throws Exception {
+    String parts = "parts:\n  t: { kind: vacuum-adapter, side-arm: open }\n  r: { kind: beaker, held: free }\n  h: { kind: vent-hose }\n";
+    assertThat(refused(parts + "joints: [ { joins: [t.outlet, r] } ]\n")).isEqualTo("t.rig.yaml:4:28: `r.held` is `free`, but `r.mouth` is in joint 1");
+    assertThat(refused(parts + "joints: [ { joins: [t.side-arm, h.inlet] } ]\n")).contains("`t.side-arm` is `open`, but `t.side-arm` is in joint 1");
+  }
+
+  @ParameterizedTest(name = "{0}")
+  @CsvSource(delimiter = '|', quoteCharacter = '^', value = {
+      "name: a: b                          | a `:` where none can be",
+      "name: 'a                            | a quote is not closed",
+      "place: { room: 21 Cel               | a `,` or a closing `}` is missing",
+      "joints: [ a                         | a `,` or a closing `]` is missing",
+      "name: %a                            | put it in quotes",
+      "name: @a                            | put it in quotes",
+      "^place:\n  room: 21 Cel\n hood: x^  | the indentation does not fit",
+  })
+  void aFaultOfYamlIsToldInWordsOfTheTrade(String text, String wanted) throws IOException {
+    assertThat(refused(text + "\n")).contains(wanted);
+  }
+
+  @Test
   void sharesOfTheOilAddUpToTheWholeAtMost() throws Exception {
     String known = Values.listed("substances").stream().findFirst().orElse("limonene");
     String other = Values.listed("substances").stream().skip(1).findFirst().orElse("estragole");
