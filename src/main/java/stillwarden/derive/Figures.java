@@ -44,9 +44,22 @@ final class Figures {
 
   /** What to ask for, for a number that cannot be had. */
   List<String> missing(String name) {
-    return numbers.all().containsKey(name) ? numbers.get(name).missing() : switch (name) {
+    List<String> own = numbers.all().containsKey(name) ? numbers.get(name).missing() : List.of();
+    return own.isEmpty() ? candidates(name).stream().filter(p -> rig.datum(p).isEmpty()).toList() : own;
+  }
+
+  private List<String> candidates(String name) {
+    String flask = name(Role.FLASK);
+    String condenser = name(Role.CONDENSER);
+    String reservoir = name(Role.RESERVOIR);
+    return switch (name) {
+      case "flask-fill" -> List.of("charge.water", flask + ".volume", "charge.material-mass", "charge.foams");
+      case "condenser-capacity" -> List.of(condenser + ".jacket-length", condenser + ".tube-bore", condenser + ".coolant.supply", name(Role.HEATER) + ".power");
       case "receiver-capacity" -> List.of(name(Role.RECEIVER) + ".volume", "target.distillate");
-      case "mantle-fit" -> List.of(name(Role.HEATER) + ".fits", name(Role.FLASK) + ".volume");
+      case "mantle-fit" -> List.of(name(Role.HEATER) + ".fits", flask + ".volume");
+      case "water-needed" -> List.of("charge.water", reservoir + ".water", "charge.plant", "charge.oil.expected", "target.distillate");
+      case "coolant-strategy" -> List.of(condenser + ".coolant.plan", condenser + ".coolant.supply", "place.warm-water", "charge.plant");
+      case "boiling-point-here" -> List.of("charge.plant");
       default -> List.of();
     };
   }
@@ -58,6 +71,9 @@ final class Figures {
   String oilFreezes() {
     if (facts.oil().isEmpty()) {
       return "";
+    }
+    if (facts.liquidusHighest().isEmpty() && facts.coolant().isPresent() && inlet().isPresent() && facts.coolant().get().strategy().equals("before-heat")) {
+      return "no";
     }
     return facts.coolant().flatMap(c -> facts.liquidusNow().flatMap(l -> inlet().map(in -> in < l.high() ? "yes" : in < l.high() + margin() ? "band" : "no")))
         .orElse("");
@@ -78,6 +94,9 @@ final class Figures {
   }
 
   String freezesInTakeOff() {
+    if (rig.datum("place.room").isEmpty() && run.lastSaw("room-temperature").isEmpty()) {
+      return "";
+    }
     return facts.freezesInTakeOff().map(b -> b ? "yes" : "no").orElse("");
   }
 
@@ -113,7 +132,8 @@ final class Figures {
   }
 
   String waterBudget() {
-    return numbers.get("water-available").known() && numbers.get("water-needed").known() ? facts.waterBudget().isPresent() ? "short" : "ok" : "";
+    boolean told = roles.one(Role.RESERVOIR).isEmpty() || rig.datum(name(Role.RESERVOIR) + ".water").isPresent();
+    return told && numbers.get("water-available").known() && numbers.get("water-needed").known() ? facts.waterBudget().isPresent() ? "short" : "ok" : "";
   }
 
   String coolantStrategy() {

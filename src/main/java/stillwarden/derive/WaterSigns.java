@@ -203,7 +203,8 @@ final class WaterSigns {
     Optional<Entry> fed = scene.run().lastDid("feed");
     boolean lately = fed.isPresent() && fed.get().measured().isPresent();
     Duration recovery = lately ? scene.numbers().reboilTime(fed.get().measured().get().si()).orElse(Duration.ofMinutes(2)) : Duration.ZERO;
-    boolean within = lately && scene.run().age(fed.get()).compareTo(recovery) <= 0;
+    Duration explained = recovery.multipliedBy(2).compareTo(Duration.ofMinutes(2)) > 0 ? recovery.multipliedBy(2) : Duration.ofMinutes(2);
+    boolean within = lately && scene.run().age(fed.get()).compareTo(explained) <= 0;
     boolean slug = lately && fed.get().measured().get().si() >= scene.limit("feed-slug-min");
     boolean now = lately && scene.run().age(fed.get()).compareTo(Duration.ofMinutes(2).plus(recovery)) <= 0;
     if (slug && now || seen.filter(e -> e.text().equals("stream")).isPresent()) {

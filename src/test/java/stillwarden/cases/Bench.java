@@ -63,6 +63,11 @@ final class Bench {
       put(tree, new String[] {"joints"}, 0, value);
       return;
     }
+    Matcher whole = Pattern.compile("joints\\[(\\d+)\\]").matcher(path);
+    if (whole.matches() && "absent".equals(value)) {
+      ((List<Object>) tree.get("joints")).remove(Integer.parseInt(whole.group(1)));
+      return;
+    }
     Matcher joint = Pattern.compile("joints\\[(\\d+)\\]\\.(.+)").matcher(path);
     if (joint.matches()) {
       put((Map<String, Object>) ((List<Object>) tree.get("joints")).get(Integer.parseInt(joint.group(1))), new String[] {joint.group(2)}, 0, value);
