@@ -2,6 +2,7 @@ package stillwarden.describe;
 
 import java.util.Collection;
 import java.util.Comparator;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 
@@ -33,9 +34,14 @@ final class Words {
     return nearest(word, known).map(n -> "; nearest is `" + n + "`").orElse("");
   }
 
+  /** The one known word that has it as a part ({@code liebig}), else the one with the fewest edits, else none. */
   static Optional<String> nearest(String word, Collection<String> known) {
     String w = word.substring(0, Math.min(word.length(), LONGEST)).toLowerCase(Locale.ROOT).replace('_', '-').replace(' ', '-');
     int most = Math.max(2, w.length() / 3);
+    List<String> longer = known.stream().filter(k -> w.length() > 2 && List.of(k.split("[-./]")).contains(w)).toList();
+    if (longer.size() == 1) {
+      return Optional.of(longer.get(0));
+    }
     return known.stream()
         .filter(k -> distance(w, k.toLowerCase(Locale.ROOT)) <= most)
         .min(Comparator.comparing((String k) -> distance(w, k.toLowerCase(Locale.ROOT))).thenComparing(k -> k));
