@@ -63,6 +63,7 @@ class LogReaderTest {
       "'saw':'hiss','reach':'yes'                    | belongs to an injury                | hiss",
       "'saw':'hiss','what':'oil'                     | does not belong to `hiss`           | hiss",
       "'saw':'spill','what':'wine'                   | one of water, oil, other, solvent   | spill",
+      "'saw':'spill','value':'no','what':'oil'       | says that nothing was               | spill",
       "'saw':'hiss','corrects':'n1'                  | no earlier line has that id         | hiss",
       "'saw':'steam','value':'on'                    | can't be judged yet                 | steam",
       "'saw':5                                       | takes a word                        | ^^",
