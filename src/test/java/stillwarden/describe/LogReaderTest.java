@@ -236,6 +236,14 @@ class LogReaderTest {
   }
 
   @Test
+  void aGrowingLogHasTheSameNets() throws Exception {
+    LogReader reader = new LogReader("-");
+    assertThat(reader.add("\uFEFF" + OK.strip())).isPresent();
+    assertThat(reader.add("{\"x\":\"" + "y".repeat(70_000) + "\"}")).isEmpty();
+    assertThat(reader.log().leftOut().get(0).reason()).contains("longer than 64 KiB");
+  }
+
+  @Test
   void theOffsetIsKeptAsWritten() throws Exception {
     Entry e = between("{'at':'2026-04-14T11:10:00+02:00','by':'nk','saw':'hiss'}").entries().get(1);
     assertThat(e.when().getOffset().getTotalSeconds()).isEqualTo(7200);
