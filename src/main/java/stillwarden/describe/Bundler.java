@@ -36,6 +36,7 @@ public final class Bundler {
     sections.put("substances", byFile(rules.resolve("substances")));
     sections.put("plants", byFile(rules.resolve("plants")));
     sections.put("actions", yaml(rules.resolve("actions.yaml")));
+    sections.put("groups", yaml(rules.resolve("groups.yaml")));
     sections.put("sources", yaml(rules.resolve("sources.yaml")));
     hazards(rules, sections);
     Map<String, Object> languages = new TreeMap<>();

@@ -1,5 +1,7 @@
 package stillwarden.describe;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
 
@@ -11,7 +13,7 @@ import java.util.Optional;
  */
 public record Joint(int index, Port a, Port b, Map<String, Datum> keys) {
   public Joint {
-    keys = Map.copyOf(keys);
+    keys = Collections.unmodifiableMap(new LinkedHashMap<>(keys));
   }
 
   public Optional<String> word(String key) {

@@ -1,5 +1,7 @@
 package stillwarden.describe;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
 
@@ -12,7 +14,7 @@ import java.util.Optional;
  */
 public record Part(String name, String kind, Map<String, Datum> keys) {
   public Part {
-    keys = Map.copyOf(keys);
+    keys = Collections.unmodifiableMap(new LinkedHashMap<>(keys));
   }
 
   public Optional<String> word(String key) {

@@ -10,18 +10,19 @@ import stillwarden.derive.Standing;
  * {@code forbid} ... methods return a finding with one more statement, so that a consequence reads as a sentence.
  *
  * @param hazard folder name, or a principle's id ({@code g4-tip-before-heat}) for a rule that modifies others
+ * @param under for a principle: the hazard whose advice it modifies, from which it takes signal word and urgency; else empty
  * @param signal overrides the hazard page's signal word, or empty
  * @param urgency overrides the hazard page's urgency, or empty
  */
 public record Finding(
-    String rule, String hazard, Standing standing, List<Sign> facts, List<Statement> statements, String signal, String urgency) {
+    String rule, String hazard, Standing standing, List<Sign> facts, List<Statement> statements, String under, String signal, String urgency) {
 
   public static Finding of(String rule, String hazard, Sign... facts) {
     Standing weakest = Standing.SEEN;
     for (Sign f : facts) {
       weakest = weakest.weaker(f.standing());
     }
-    return new Finding(rule, hazard, weakest, List.of(facts), List.of(), "", "");
+    return new Finding(rule, hazard, weakest, List.of(facts), List.of(), "", "", "");
   }
 
   public Finding propose(String... actions) {
@@ -71,13 +72,27 @@ public record Finding(
   }
 
   public Finding as(String otherSignal, String otherUrgency) {
-    return new Finding(rule, hazard, standing, facts, statements, otherSignal, otherUrgency);
+    return new Finding(rule, hazard, standing, facts, statements, under, otherSignal, otherUrgency);
+  }
+
+  /** For a principle: what it modifies; signal word, urgency and facts of the other come along. */
+  public Finding modifying(Finding other) {
+    List<Sign> all = new ArrayList<>(facts);
+    other.facts().stream().filter(f -> !all.contains(f)).forEach(all::add);
+    String root = other.under().isEmpty() ? other.hazard() : other.under();
+    return new Finding(rule, hazard, standing.weaker(other.standing()), List.copyOf(all), statements, root, other.signal(), other.urgency());
+  }
+
+  /** Only its plain bans: a set-up hazard mended cold still forbids. */
+  public Finding bansOnly() {
+    List<Statement> bans = statements.stream().filter(s -> s instanceof Statement.Forbid).toList();
+    return new Finding(rule, hazard, standing, facts, bans, under, signal, urgency);
   }
 
   private Finding with(Statement s) {
     List<Statement> more = new ArrayList<>(statements);
     more.add(s);
-    return new Finding(rule, hazard, standing, facts, List.copyOf(more), signal, urgency);
+    return new Finding(rule, hazard, standing, facts, List.copyOf(more), under, signal, urgency);
   }
 
   /** Acted on: every matched sign is seen or counted as worst. */

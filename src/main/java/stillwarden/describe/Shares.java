@@ -1,0 +1,46 @@
+package stillwarden.describe;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/** A map of names to shares of one whole, such as the makeup of an oil. */
+record Shares(Key key, String path, Defects defects) {
+  /** Shares are rounded where they come from; beyond this a sum over the whole is an error. */
+  private static final double ROUNDING = 0.005;
+
+  Map<String, Datum> read(Node n) {
+    Map<String, Datum> out = new LinkedHashMap<>();
+    if (!n.is(Node.Kind.MAP) || n.fields().isEmpty()) {
+      defects.add(n.spot(), Words.quote(key.path()) + " takes names with their shares, for example `limonene: 8 %`; here is " + n.describe());
+      return out;
+    }
+    n.fields().forEach(f -> share(f, out));
+    double sum = out.values().stream().mapToDouble(d -> d.measured().orElseThrow().si()).sum();
+    if (sum > 1 + ROUNDING) {
+      defects.add(n.spot(), Words.quote(key.path()) + " adds up to " + Math.round(sum * 1000) / 10.0 + " %; no more than 100 % can be");
+    }
+    return out;
+  }
+
+  private void share(Node.Field f, Map<String, Datum> out) {
+    List<String> known = Values.listed(key.list());
+    if (!known.isEmpty() && !known.contains(f.key())) {
+      defects.add(f.spot(), Words.quote(f.key()) + " is not in the list of " + key.list() + Words.hint(f.key(), known)
+          + "; leave out what is not listed: the rest of the whole counts as unknown");
+      return;
+    }
+    try {
+      out.put(f.key(), Values.read(share(f.key()), path + "." + f.key(), f.value()));
+    } catch (BadValue e) {
+      defects.add(f.value().spot(), e.getMessage());
+    }
+  }
+
+  private static Key share(String name) {
+    return new Key(name, Key.Type.QUANTITY, List.of(), Optional.of(Dimension.FRACTION), List.of("%"), OptionalDouble.of(0), OptionalDouble.of(1), false, "",
+        "share of the whole");
+  }
+}

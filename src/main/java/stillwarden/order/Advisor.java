@@ -1,0 +1,82 @@
+package stillwarden.order;
+
+import java.time.Instant;
+import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
+import java.time.format.DateTimeParseException;
+import java.util.Comparator;
+import java.util.Optional;
+import stillwarden.derive.Situation;
+import stillwarden.describe.Entry;
+import stillwarden.describe.Policy;
+import stillwarden.describe.Rig;
+import stillwarden.describe.RunLog;
+import stillwarden.judge.Judge;
+import stillwarden.judge.Judgement;
+
+/**
+ * The whole chain in one call: derive, judge, order. A pure function of its arguments; the clock is never read.
+ */
+public final class Advisor {
+  private Advisor() {}
+
+  /** @param at the moment of the inspection; else the rig's {@code seen.at}, else none: then nothing dated is in force */
+  public static Advice inspect(Rig rig, Policy policy, Optional<OffsetDateTime> at) {
+    Optional<OffsetDateTime> when = at.or(() -> rig.word("seen.at").flatMap(Advisor::time));
+    Situation s = Situation.inspection(rig, policy, when.map(OffsetDateTime::toInstant), when.map(OffsetDateTime::getOffset).orElse(ZoneOffset.UTC));
+    Judgement j = Judge.once(Judge.forInspection(), s.signs());
+    return new Answer(s, j, when, true).advice(java.util.List.of());
+  }
+
+  /** @param at the moment to judge; later lines are left out; else the latest time in the log */
+  public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at) {
+    return advise(rig, policy, log, at, Judge.forRuns(), true);
+  }
+
+  /** The same without a cap on steps, bans and questions: for those who check, not for those who act. */
+  public static Advice whole(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at) {
+    OffsetDateTime when = at.orElseGet(() -> latest(log));
+    Situation s = situation(rig, policy, log, when);
+    try (Judge judge = Judge.forRuns()) {
+      return new Answer(s, judge.judge(SetupFaults.with(s, judge.judge(s.signs()))), Optional.of(when), true).advice(log.leftOut());
+    }
+  }
+
+  /** With a judge that is kept for a live run: only the signs that came or went are handed to the engine. */
+  public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at, Judge judge, boolean closeJudge) {
+    OffsetDateTime when = at.orElseGet(() -> latest(log));
+    Situation s = situation(rig, policy, log, when);
+    Judgement j = judge.judge(SetupFaults.with(s, judge.judge(s.signs())));
+    if (closeJudge) {
+      judge.close();
+    }
+    return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(log.leftOut());
+  }
+
+  /** Why the rules of one hazard spoke or kept quiet. */
+  public static Explanation explain(String hazard, Rig rig, Policy policy, Optional<RunLog> log, Optional<OffsetDateTime> at) {
+    Optional<OffsetDateTime> when = at.or(() -> log.map(Advisor::latest)).or(() -> rig.word("seen.at").flatMap(Advisor::time));
+    Situation s = log.isPresent()
+        ? situation(rig, policy, log.get(), when.orElseThrow())
+        : Situation.inspection(rig, policy, when.map(OffsetDateTime::toInstant), ZoneOffset.UTC);
+    Judgement j = Judge.once(Judge.forRuns(), s.signs());
+    return Why.explain(hazard, s, j);
+  }
+
+  /** The facts of a run at one moment, for those who judge by other means (tests, audits). */
+  public static Situation situation(Rig rig, Policy policy, RunLog log, OffsetDateTime when) {
+    return Situation.run(rig, policy, log.entries(), when.toInstant(), when.getOffset());
+  }
+
+  private static OffsetDateTime latest(RunLog log) {
+    return log.entries().stream().max(Comparator.comparing(Entry::at)).map(Entry::when).orElseGet(() -> Instant.EPOCH.atOffset(ZoneOffset.UTC));
+  }
+
+  private static Optional<OffsetDateTime> time(String text) {
+    try {
+      return Optional.of(OffsetDateTime.parse(text));
+    } catch (DateTimeParseException e) {
+      return Optional.empty();
+    }
+  }
+}

@@ -1,0 +1,221 @@
+package stillwarden.order;
+
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.Comparator;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.TreeSet;
+import java.util.function.ToDoubleFunction;
+import java.util.function.ToIntFunction;
+import stillwarden.judge.Finding;
+import stillwarden.judge.Statement;
+
+/**
+ * Statements in, ordered steps out: bans, merging, {@code Before}, the ladder. No clock, no texts, no rule engine.
+ *
+ * <p>INVARIANT: a ban beats a proposal. INVARIANT: the order is a function of the set of findings, not of their order.
+ */
+final class Arrange {
+  /**
+   * @param steps in order
+   * @param bans deed to its ban, deadliest first
+   * @param cycle deeds whose relations contradict each other: a defect of the rulebook, reported and broken by the ladder
+   */
+  record Plan(List<Step> steps, List<Bar> bans, List<String> cycle) {}
+
+  /** A deed that must not be done, or not before something. */
+  record Bar(String deed, String until, boolean named, List<Finding> reasons) {
+    /** A plain ban is stronger than one with {@code until}; what a rule named is told, what only a group brought is not. */
+    Bar with(Bar other) {
+      String both = until.isEmpty() || other.until.isEmpty() ? "" : until;
+      return new Bar(deed, both, named || other.named, joined(reasons, other.reasons));
+    }
+  }
+
+  private final ToDoubleFunction<Step> timeToHarm;
+  private final ToIntFunction<Step> walkRound;
+
+  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound) {
+    this.timeToHarm = timeToHarm;
+    this.walkRound = walkRound;
+  }
+
+  Plan arrange(List<Finding> active) {
+    Map<String, Bar> bars = bars(active);
+    Map<String, Step> steps = merged(active);
+    replaceWeaker(steps);
+    steps.values().removeIf(s -> barred(s, bars, steps.values()));
+    Set<Edge> edges = edges(active, bars, steps.values());
+    List<String> cycle = new ArrayList<>();
+    List<Step> sorted = sort(steps.values(), edges, cycle);
+    return new Plan(placePeople(sorted, edges), List.copyOf(bars.values()), cycle);
+  }
+
+  private static Map<String, Bar> bars(List<Finding> active) {
+    Map<String, Bar> out = new LinkedHashMap<>();
+    for (Finding f : active) {
+      for (Statement s : f.statements()) {
+        if (s instanceof Statement.Forbid ban) {
+          Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until(), ban.deed().equals(deed), List.of(f)), Bar::with));
+        }
+      }
+    }
+    return out;
+  }
+
+  private static List<Finding> joined(List<Finding> a, List<Finding> b) {
+    List<Finding> out = new ArrayList<>(a);
+    out.addAll(b);
+    return List.copyOf(out);
+  }
+
+  private static Map<String, Step> merged(List<Finding> active) {
+    Map<String, Step> out = new LinkedHashMap<>();
+    for (Finding f : active) {
+      for (Statement s : f.statements()) {
+        if (s instanceof Statement.Propose p) {
+          // repairs of different things are different deeds, even under one id
+          String what = Deeds.of(p.action()).cold() ? p.say() : "";
+          Step step = out.computeIfAbsent(p.action() + "|" + p.part() + "|" + what, k -> new Step(Deeds.of(p.action()), p.part()));
+          step.reasons.add(f);
+          if (!p.say().isEmpty()) {
+            step.variants.add(p.say());
+          }
+        }
+      }
+    }
+    return out;
+  }
+
+  private static void replaceWeaker(Map<String, Step> steps) {
+    Set<String> present = new TreeSet<>();
+    steps.values().forEach(s -> present.add(s.id()));
+    for (Step strong : List.copyOf(steps.values())) {
+      for (String weak : strong.deed.replaces()) {
+        // what is itself replaced by something stronger still does its own replacing: the relation is transitive
+        steps.values().removeIf(s -> {
+          boolean falls = s.id().equals(weak) && s != strong;
+          if (falls) {
+            strong.reasons.addAll(s.reasons);
+          }
+          return falls;
+        });
+      }
+    }
+  }
+
+  private static boolean barred(Step s, Map<String, Bar> bars, Collection<Step> all) {
+    Bar bar = bars.get(s.id());
+    if (bar == null) {
+      return false;
+    }
+    if (bar.until().isEmpty()) {
+      return true;
+    }
+    boolean action = Deeds.ids().contains(bar.until());
+    if (!action) {
+      s.iff = bar.until();
+      return false;
+    }
+    return all.stream().noneMatch(o -> o.id().equals(bar.until()));
+  }
+
+  private record Edge(Step first, Step then) {}
+
+  private static Set<Edge> edges(List<Finding> active, Map<String, Bar> bars, Collection<Step> steps) {
+    Set<Edge> out = new HashSet<>();
+    boolean alarm = active.stream().anyMatch(f -> !Hazards.speaking(f).end() && !Hazards.of(f.hazard()).end() && cuts(f));
+    for (Finding f : active) {
+      // the leisurely order of a planned end gives way once a hazard asks for an energy cut
+      boolean givesWay = alarm && Hazards.of(f.hazard()).end();
+      for (Statement s : f.statements()) {
+        if (s instanceof Statement.Before b && !givesWay) {
+          link(steps, b.first(), b.then(), out);
+        }
+      }
+    }
+    for (Bar bar : bars.values()) {
+      if (!bar.until().isEmpty()) {
+        link(steps, bar.until(), bar.deed(), out);
+      }
+    }
+    return out;
+  }
+
+  private static boolean cuts(Finding f) {
+    return f.statements().stream().anyMatch(s -> s instanceof Statement.Propose p && Deeds.of(p.action()).cut());
+  }
+
+  private static void link(Collection<Step> steps, String first, String then, Set<Edge> out) {
+    for (Step a : steps) {
+      for (Step b : steps) {
+        if (a != b && a.id().equals(first) && b.id().equals(then)) {
+          out.add(new Edge(a, b));
+        }
+      }
+    }
+  }
+
+  private Comparator<Step> byLadder() {
+    return Comparator.<Step>comparingDouble(s -> s.iff.isEmpty() ? s.deed.ladder() : 8.5 + s.deed.ladder() / 100)
+        .thenComparingDouble(timeToHarm)
+        .thenComparingInt(walkRound)
+        .thenComparing(Step::id)
+        .thenComparing(s -> s.part)
+        .thenComparing(s -> s.variants.toString());
+  }
+
+  /** Kahn's algorithm, always taking the first by the ladder among those that nothing must precede. */
+  private List<Step> sort(Collection<Step> steps, Set<Edge> edges, List<String> cycle) {
+    Map<Step, Integer> waiting = new HashMap<>();
+    Map<Step, List<Step>> followers = new HashMap<>();
+    for (Edge e : edges) {
+      waiting.merge(e.then(), 1, Integer::sum);
+      followers.computeIfAbsent(e.first(), k -> new ArrayList<>()).add(e.then());
+    }
+    List<Step> left = new ArrayList<>(steps);
+    left.sort(byLadder());
+    List<Step> out = new ArrayList<>();
+    while (!left.isEmpty()) {
+      Step next = left.stream().filter(s -> waiting.getOrDefault(s, 0) == 0).findFirst().orElse(null);
+      if (next == null) {
+        next = left.get(0);
+        cycle.add(next.toString());
+      }
+      left.remove(next);
+      out.add(next);
+      followers.getOrDefault(next, List.of()).forEach(s -> waiting.merge(s, -1, Integer::sum));
+    }
+    return out;
+  }
+
+  /**
+   * A warning or a step back takes no time but must not part the first two equipment steps, nor push the sash out of
+   * the first three. First aid stays in front; so does the warning in fire, shock, hammer and spill.
+   */
+  private static List<Step> placePeople(List<Step> sorted, Set<Edge> edges) {
+    List<Step> aside = new ArrayList<>();
+    for (Step s : sorted) {
+      boolean first = s.deed.ladder() < 1 || s.reasons.stream().anyMatch(f -> Hazards.speaking(f).warnFirst());
+      boolean bound = edges.stream().anyMatch(e -> e.first() == s || e.then() == s);
+      if (s.deed.personal() && s.deed.ladder() < 2 && !first && !bound) {
+        aside.add(s);
+      }
+    }
+    List<Step> rest = new ArrayList<>(sorted);
+    rest.removeAll(aside);
+    List<Step> equipment = rest.stream().filter(s -> s.deed.equipment()).toList();
+    if (aside.isEmpty() || equipment.isEmpty() || !equipment.get(0).deed.cut()) {
+      return sorted;
+    }
+    int keep = equipment.size() > 2 && equipment.get(2).id().equals("sash-down") ? 3 : Math.min(2, equipment.size());
+    int place = rest.indexOf(equipment.get(keep - 1)) + 1;
+    rest.addAll(place, aside);
+    return rest;
+  }
+}
