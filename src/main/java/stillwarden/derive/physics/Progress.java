@@ -109,7 +109,7 @@ record Progress(
   }
 
   private static Optional<Band> reservoir(Bench b) {
-    Optional<Part> part = Roles.reservoir(b.rig);
+    Optional<Part> part = b.parts.reservoir();
     Optional<Double> size = part.flatMap(p -> p.si("volume"));
     if (b.run.reservoir().isPresent()) {
       RunState.Look look = b.run.reservoir().get();
@@ -120,7 +120,7 @@ record Progress(
   }
 
   private static Optional<Band> receiver(Bench b, Optional<BoilUp> rate, Optional<Instant> boils, Optional<Band> collected) {
-    Optional<Double> size = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> size = b.parts.receiver().flatMap(p -> p.si("volume"));
     if (b.run.receiver().isPresent()) {
       RunState.Look look = b.run.receiver().get();
       Optional<Band> seen = look.volume().isPresent()

@@ -75,7 +75,7 @@ final class TimeNumbers {
       noHeat("feed-limit");
       return;
     }
-    double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
+    double from = b.parts.reservoir().flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
     double perCubicMetre = WaterSteam.COLD_DENSITY * WaterSteam.warming(from, b.boiling());
     out.put("feed-limit", net.get().times(Limits.value("feed-share") / perCubicMetre), "feed that takes a quarter of the net heat", "PRACTICE; IAPWS-IF97", notes());
   }
@@ -113,7 +113,7 @@ final class TimeNumbers {
   }
 
   private void receiver() {
-    Optional<Double> size = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> size = b.parts.receiver().flatMap(p -> p.si("volume"));
     Optional<Band> room = size.flatMap(v -> now.receiver().map(r -> Band.of(v * Limits.value("receiver-full-share")).minus(r).atLeast(0)));
     time("time-to-full-receiver", room, "until the receiver is full to its limit", "receiver.volume");
   }

@@ -79,7 +79,7 @@ class PhysicsTest {
   @Test
   void boilUpIsNetPowerOverLatentHeat() { // 100 W net boil 2.66 g/min of water (IAPWS-IF97); loss and efficiency stated
     Numbers n = plan();
-    Heat h = Heat.of(Rigs.fennel(), RunState.of(List.of(), null), 372, 294.15).orElseThrow();
+    Heat h = Heat.of(RigParts.of(Rigs.fennel()), RunState.of(List.of(), null), 372, 294.15).orElseThrow();
     assertThat(value(n, "boil-up-rate")).isCloseTo(h.net().nominal() / 100 * 2.66, offset(0.2));
   }
 
