@@ -111,6 +111,7 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
     Band glass = flaskVolume.map(v -> Limits.byFlask("glass-mass", v, 1e-3)).orElse(Band.of(0));
     double liquid = water * WaterSteam.COLD_DENSITY * WaterSteam.liquidHeatCapacity(333, 101_325);
     double plant = charge.plantMass() * Limits.value("plant-heat-capacity");
-    return glass.times(Limits.value("glass-heat-capacity")).plus(Band.of(liquid + plant));
+    double oil = charge.dispersed() ? 0 : charge.oilMass().map(Band::nominal).orElse(0.0) * Limits.value("oil-heat-capacity");
+    return glass.times(Limits.value("glass-heat-capacity")).plus(Band.of(liquid + plant + oil));
   }
 }

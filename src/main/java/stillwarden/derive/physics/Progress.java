@@ -100,7 +100,7 @@ record Progress(
 
   private static Band boiled(Bench b, Optional<BoilUp> rate, Optional<Instant> boils, Instant since) {
     double seconds = boiledSince(b, boils, since);
-    return rate.map(r -> r.cubicMetres().times(r.waterShare() * seconds)).orElse(Band.of(0));
+    return rate.map(r -> r.cubicMetres().times((b.charge.dispersed() ? r.waterShare() : 1) * seconds)).orElse(Band.of(0));
   }
 
   private static Band read(double volume, double vessel) {

@@ -118,6 +118,11 @@ final class TimeNumbers {
     time("time-to-full-receiver", room, "until the receiver is full to its limit", "receiver.volume");
   }
 
+  /** A receiver fills, and a flask with a free oil layer falls, by all that comes over; else only the water counts. */
+  private boolean wholeDistillate(String name) {
+    return name.contains("receiver") || name.contains("target") || name.contains("minimum") && !b.charge.dispersed();
+  }
+
   private void time(String name, Optional<Band> volume, String what, String... missing) {
     if (b.run.started() && !b.run.heatOn()) {
       out.absent(name, "the heat is off");
@@ -126,7 +131,7 @@ final class TimeNumbers {
     } else if (rate.isEmpty() || now.heatLeft().isEmpty()) {
       noHeat(name);
     } else {
-      Band share = rate.get().cubicMetres().times(name.contains("receiver") || name.contains("target") ? 1 : rate.get().waterShare());
+      Band share = rate.get().cubicMetres().times(wholeDistillate(name) ? 1 : rate.get().waterShare());
       boolean none = volume.get().high() == 0;
       Band seconds = none ? Band.of(0) : volume.get().over(share).plus(now.heatLeft().get());
       List<String> notes = notes(b.run.started() ? "from now" : "from heat-on");
