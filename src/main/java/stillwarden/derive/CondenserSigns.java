@@ -235,7 +235,7 @@ final class CondenserSigns {
     boolean vapour = scene.run().lastSaw("vapour-past-condenser").filter(e -> !e.text().equals("none") && !e.at().isBefore(stop.at())).isPresent()
         || scene.run().lastSaw("vapour-front").filter(e -> e.text().equals("last-third") && !e.at().isBefore(stop.at())).isPresent();
     boolean gone = solids.text().equals("none") && !solids.at().isBefore(stop.at());
-    String value = vapour ? "failed" : gone ? "melted" : over ? "failed" : "melting";
+    String value = vapour || over ? "failed" : gone ? "melted" : "melting";
     out.seen("coolant-watch", "", value, "coolant shut " + scene.clock(stop.at()) + " to melt crystals, for " + time.toSeconds() + " s; " + scene.told(solids), stop.at(), "condenser-solids");
   }
 }

@@ -63,10 +63,11 @@ final class EventSigns {
   private void notSure(Observation o, Entry e) {
     List<String> values = o.key().values();
     String counts = Knowledge.section("words").get("log").get("saw").get(o.id()).text("not-sure").orElse(o.key().type() == Key.Type.TRI ? values.get(values.size() - 1) : "");
-    if (counts.isEmpty()) {
+    if (counts.isEmpty() || counts.equals("ask")) {
       out.possible(o.id(), e.part(), values, scene.told(e), List.of(o.id()));
     } else {
       out.counted(o.id(), counts, scene.told(e) + ", counts as " + counts, o.id());
+      out.possible(o.id(), e.part(), values.subList(1, values.size()).stream().filter(v -> !v.equals(counts)).toList(), scene.told(e), List.of(o.id()));
     }
   }
 

@@ -12,12 +12,16 @@ import stillwarden.derive.physics.JointFit;
 import stillwarden.derive.physics.Levels;
 import stillwarden.derive.physics.Numbers;
 import stillwarden.derive.physics.SideFacts;
+import stillwarden.describe.Entry;
 import stillwarden.describe.Joint;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Rig;
 
 /** The computed numbers as the sign makers ask for them: each against its limit, in one word, with why. */
 final class Figures {
+  /** Two reading errors of 3 % of the vessel each. */
+  private static final double SUDDEN_SHARE = 0.06;
+
   private final Rig rig;
   private final Policy policy;
   private final Roles roles;
@@ -101,11 +105,12 @@ final class Figures {
   }
 
   Optional<Duration> meltTime() {
-    return facts.jacketWarmsIn().map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
+    // coolant already warmer than the computed freezing point explains no crystals: then the limit decides
+    return facts.jacketWarmsIn().filter(b -> b.high() > 1).map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
   }
 
   Optional<Duration> coolingTime() {
-    return facts.coolsToHandWarm();
+    return facts.coolsToHandWarm().map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
   }
 
   /** Until when a weak boil is explained by the last feed. */
@@ -153,7 +158,21 @@ final class Figures {
   }
 
   boolean leakSuspected() {
-    return facts.leakSuspected().isPresent();
+    return facts.leakSuspected().isPresent() || suddenLoss();
+  }
+
+  /** Between two readings more went than the full power could have boiled, by more than two reading errors. */
+  private boolean suddenLoss() {
+    List<Entry> read = run.saw("flask-level").stream().filter(e -> e.measured().isPresent()).toList();
+    Estimate rate = numbers.get("boil-up-rate");
+    Optional<Double> volume = roles.one(Role.FLASK).flatMap(p -> p.si("volume"));
+    if (read.size() < 2 || !rate.known() || volume.isEmpty()) {
+      return false;
+    }
+    Entry a = read.get(read.size() - 2);
+    Entry b = read.get(read.size() - 1);
+    double most = rate.high() * 1e-6 * Duration.between(a.at(), b.at()).toMillis() / 60_000.0;
+    return a.measured().get().si() - b.measured().get().si() > most + SUDDEN_SHARE * volume.get();
   }
 
   boolean targetReached() {

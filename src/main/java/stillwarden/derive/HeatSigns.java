@@ -143,6 +143,8 @@ final class HeatSigns {
     boolean wet = seen.isPresent() || stated;
     if (wet && !dead) {
       out.seen("heater-live-wet", "", "yes", seen.map(scene::told).orElse("liquid in the heater, by the rig file"), seen.map(Entry::at).orElse(null), "heater-wet");
+    } else if (!bath && seen.isEmpty() && !scene.time().live() && scene.key(Role.HEATER, "liquid-inside").isEmpty() && !scene.roles().absent().contains(Role.HEATER)) {
+      out.possible("heater-live-wet", "nobody has looked into the heater", scene.name(Role.HEATER) + ".liquid-inside");
     } else {
       out.seen("heater-live-wet", "", "no", wet ? "the heater is wet and proven dead" : "nobody has seen the heater wet", null, "heater-wet");
     }

@@ -206,6 +206,10 @@ final class RunExtras {
 
   private void laterOf(String about, String seen, Map<String, String> deeds) {
     Optional<Entry> look = scene.run().lastSaw(seen).filter(e -> !e.text().equals(Looks.NOT_SURE));
+    if (scene.run().lastSaw(seen).filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent()) {
+      out.possible(about, scene.told(scene.run().lastSaw(seen).get()), seen);
+      return;
+    }
     Optional<Entry> deed = scene.run().lastDid(deeds.keySet().toArray(String[]::new));
     Optional<Entry> last = Stream.of(look, deed).flatMap(Optional::stream).max(Comparator.comparing(Entry::at).thenComparing(Entry::line));
     if (last.isPresent()) {

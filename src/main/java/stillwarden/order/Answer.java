@@ -219,7 +219,7 @@ final class Answer {
       }
     });
     Set<String> unknown = new TreeSet<>();
-    findings.stream().filter(f -> !f.isActive() && Verdicts.gate(f) && Hazards.signal(f) != Signal.NOTICE)
+    findings.stream().filter(f -> !f.isActive() && Verdicts.holdsStart(f))
         .forEach(f -> f.facts().stream().filter(x -> x.standing() == Standing.POSSIBLE).forEach(x -> unknown.add(x.about() + " " + x.part())));
     if (unknownOnly) {
       return unknown;

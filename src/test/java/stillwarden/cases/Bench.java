@@ -30,7 +30,7 @@ final class Bench {
   static final Instant HEAT_ON = Instant.parse("2026-05-12T09:00:00Z");
   private static final int FIRST_DROP = 20;
   private static final Pattern LINE = Pattern.compile("([\\d.]+)\\s+(saw|did)\\s+(\\S+)\\s*(.*)");
-  private static final Set<String> ENDS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas", "end-run");
+  private static final Set<String> ENDS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas");
 
   private Bench() {}
 
