@@ -81,11 +81,11 @@ final class TimeNumbers {
   }
 
   private void fill() {
-    if (b.volume.isEmpty() || now.flask().isEmpty()) {
+    if (b.volume.isEmpty() || now.fill().isEmpty()) {
       out.absent("flask-fill", "flask volume or water not stated", "flask.volume", "charge.water");
       return;
     }
-    out.put("flask-fill", now.flask().get().times(1 / b.volume.get()), "water and solids over flask volume", "geometry", b.charge.notes());
+    out.put("flask-fill", now.fill().get().times(1 / b.volume.get()), "water and solids over flask volume", "geometry", b.charge.notes());
   }
 
   private void target() {

@@ -330,4 +330,12 @@ class PhysicsTest {
   void aPlannedTimeIsATargetWhereNothingElseIs() {
     assertThat(run(30, Rigs.fennel("target.distillate = -", "target.time = 90 min"), Rigs.did(0, "heat-on", "60 %")).get("time-to-target").nominal()).isCloseTo(60, offset(0.01));
   }
+
+  @Test
+  void aWordForTheLevelDoesNotBlowUpTheFill() { // 45 % at the start, 20 mL boiled away
+    Entry[] log = {Rigs.did(0, "heat-on", "60 %"), Rigs.saw(20, "first-drop", "yes"), Rigs.saw(25, "flask-level", "ok")};
+    Estimate fill = run(25, log).get("flask-fill");
+    assertThat(fill.high()).isLessThan(46);
+    assertThat(fill.nominal()).isBetween(40.0, 45.0);
+  }
 }
