@@ -66,7 +66,7 @@ final class Answer {
   Advice advice(List<RunLog.LeftOut> leftOut) {
     boolean setup = situation.time().stage().equals("setting-up");
     List<Finding> acted = findings.stream().filter(Finding::isActive).map(f -> setup || !Verdicts.gate(f) ? f : f.bansOnly()).toList();
-    Arrange arrange = new Arrange(s -> deadlines.secondsToHarm(s.reasons), s -> Walk.station(situation, s.part));
+    Arrange arrange = new Arrange(s -> deadlines.secondsToHarm(s.reasons), s -> setup ? Walk.first(situation, s.reasons) : Walk.station(situation, s.part), setup);
     Arrange.Plan plan = arrange.arrange(acted);
     List<Step> steps = new ArrayList<>(plan.steps());
     markDone(steps);

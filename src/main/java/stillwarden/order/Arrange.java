@@ -40,9 +40,13 @@ final class Arrange {
   private final ToDoubleFunction<Step> timeToHarm;
   private final ToIntFunction<Step> walkRound;
 
-  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound) {
+  private final boolean walking;
+
+  /** @param walking an inspection: in walk-round order, for nothing is hot yet */
+  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound, boolean walking) {
     this.timeToHarm = timeToHarm;
     this.walkRound = walkRound;
+    this.walking = walking;
   }
 
   Plan arrange(List<Finding> active) {
@@ -162,6 +166,14 @@ final class Arrange {
   }
 
   private Comparator<Step> byLadder() {
+    if (walking) {
+      return Comparator.<Step>comparingInt(s -> s.id().equals("do-not-start") ? 0 : 1)
+          .thenComparingInt(walkRound)
+          .thenComparingDouble(s -> s.deed.ladder())
+          .thenComparing(Step::id)
+          .thenComparing(s -> s.part)
+          .thenComparing(s -> s.variants.toString());
+    }
     return Comparator.<Step>comparingDouble(s -> s.iff.isEmpty() ? s.deed.ladder() : 8.5 + s.deed.ladder() / 100)
         .thenComparingDouble(timeToHarm)
         .thenComparingInt(walkRound)
