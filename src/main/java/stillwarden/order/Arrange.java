@@ -9,6 +9,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.function.ToDoubleFunction;
 import java.util.function.ToIntFunction;
@@ -61,7 +62,7 @@ final class Arrange {
   }
 
   private static Map<String, Bar> bars(List<Finding> active) {
-    Map<String, Bar> out = new LinkedHashMap<>();
+    Map<String, Bar> out = new TreeMap<>();
     for (Finding f : active) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Forbid ban) {
@@ -69,6 +70,18 @@ final class Arrange {
         }
       }
     }
+    return deadliestFirst(out.values());
+  }
+
+  /** By the gravest signal word behind a ban, then by what the deed itself can do ({@code @deadliest} in rules/groups.yaml). */
+  private static Map<String, Bar> deadliestFirst(Collection<Bar> bars) {
+    List<String> rank = Deeds.group("@deadliest");
+    List<Bar> sorted = new ArrayList<>(bars);
+    sorted.sort(Comparator.comparingInt((Bar b) -> -b.reasons().stream().mapToInt(f -> Hazards.signal(f).ordinal()).max().orElse(0))
+        .thenComparingInt(b -> rank.contains(b.deed()) ? rank.indexOf(b.deed()) : rank.size())
+        .thenComparing(Bar::deed));
+    Map<String, Bar> out = new LinkedHashMap<>();
+    sorted.forEach(b -> out.put(b.deed(), b));
     return out;
   }
 
