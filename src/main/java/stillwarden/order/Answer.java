@@ -83,7 +83,7 @@ final class Answer {
         actions.subList(0, shown),
         actions.size() - shown,
         bans(plan.bans()),
-        new Questions(situation).of(findings, everything),
+        new Questions(situation).again(openLooks(leftOut)).of(findings, everything),
         situation.numbers().list(),
         setup ? new Repairs(situation).of(findings) : List.of(),
         leftOut.stream().map(l -> "line " + l.line() + ": " + l.reason()).toList(),
@@ -116,6 +116,10 @@ final class Answer {
   private String leftOutMatters(List<RunLog.LeftOut> leftOut, String verdict) {
     boolean open = leftOut.stream().anyMatch(l -> !l.torn() && !lookedAtSince(l));
     return open && verdict.equals("carry-on") ? "adjust" : verdict;
+  }
+
+  private List<String> openLooks(List<RunLog.LeftOut> leftOut) {
+    return leftOut.stream().filter(l -> !l.torn() && !l.about().isEmpty() && !lookedAtSince(l)).map(RunLog.LeftOut::about).distinct().toList();
   }
 
   private boolean lookedAtSince(RunLog.LeftOut l) {

@@ -36,6 +36,12 @@ final class Questions {
     this.situation = situation;
   }
 
+  /** What a line that could not be read seems to have been about is looked at again. */
+  Questions again(List<String> abouts) {
+    abouts.stream().filter(a -> Knowledge.section("words").get("log").get("saw").has(a)).forEach(a -> asked.computeIfAbsent(a, k -> new Asked()));
+    return this;
+  }
+
   List<Advice.Question> of(List<Finding> findings, boolean all) {
     boolean setup = situation.time().stage().equals("setting-up");
     for (Finding f : findings) {
