@@ -13,6 +13,7 @@ final class TimeNumbers {
   private final Optional<BoilUp> rate;
   private final Progress now;
   private final Numbers.Out out;
+  private final List<String> floor = new ArrayList<>();
 
   private TimeNumbers(Bench b, Optional<BoilUp> rate, Progress now, Numbers.Out out) {
     this.b = b;
@@ -29,6 +30,9 @@ final class TimeNumbers {
     t.target();
     t.time("time-to-reservoir-end", now.reservoir(), "reservoir at the rate at which water boils away", "reservoir.water");
     Optional<Double> minimum = b.volume.map(b::minimumLevel);
+    if (b.volume.isPresent() && minimum.get() > Levels.minimum(b.volume.get(), b.flask.flatMap(f -> f.si("minimum-level")), 0)) {
+      t.floor.add("minimum level raised to what covers the solids");
+    }
     t.time("time-to-minimum-level", minimum.flatMap(m -> now.flask().map(f -> f.minus(Band.of(m)).atLeast(0))),
         "flask above its minimum level, nothing fed", "flask.volume", "charge.water");
     t.time("time-to-dryness", now.flask().map(f -> f.minus(b.charge.displaced()).minus(b.charge.uptake()).atLeast(0)),
@@ -71,17 +75,17 @@ final class TimeNumbers {
       noHeat("feed-limit");
       return;
     }
-    double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
+    double from = b.parts.reservoir().flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
     double perCubicMetre = WaterSteam.COLD_DENSITY * WaterSteam.warming(from, b.boiling());
     out.put("feed-limit", net.get().times(Limits.value("feed-share") / perCubicMetre), "feed that takes a quarter of the net heat", "PRACTICE; IAPWS-IF97", notes());
   }
 
   private void fill() {
-    if (b.volume.isEmpty() || now.flask().isEmpty()) {
+    if (b.volume.isEmpty() || now.fill().isEmpty()) {
       out.absent("flask-fill", "flask volume or water not stated", "flask.volume", "charge.water");
       return;
     }
-    out.put("flask-fill", now.flask().get().times(1 / b.volume.get()), "water and solids over flask volume", "geometry", b.charge.notes());
+    out.put("flask-fill", now.fill().get().times(1 / b.volume.get()), "water and solids over flask volume", "geometry", b.charge.notes());
   }
 
   private void target() {
@@ -109,9 +113,14 @@ final class TimeNumbers {
   }
 
   private void receiver() {
-    Optional<Double> size = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> size = b.parts.receiver().flatMap(p -> p.si("volume"));
     Optional<Band> room = size.flatMap(v -> now.receiver().map(r -> Band.of(v * Limits.value("receiver-full-share")).minus(r).atLeast(0)));
     time("time-to-full-receiver", room, "until the receiver is full to its limit", "receiver.volume");
+  }
+
+  /** A receiver fills, and a flask with a free oil layer falls, by all that comes over; else only the water counts. */
+  private boolean wholeDistillate(String name) {
+    return name.contains("receiver") || name.contains("target") || name.contains("minimum") && !b.charge.dispersed();
   }
 
   private void time(String name, Optional<Band> volume, String what, String... missing) {
@@ -122,10 +131,14 @@ final class TimeNumbers {
     } else if (rate.isEmpty() || now.heatLeft().isEmpty()) {
       noHeat(name);
     } else {
-      Band share = rate.get().cubicMetres().times(name.contains("receiver") || name.contains("target") ? 1 : rate.get().waterShare());
+      Band share = rate.get().cubicMetres().times(wholeDistillate(name) ? 1 : rate.get().waterShare());
       boolean none = volume.get().high() == 0;
       Band seconds = none ? Band.of(0) : volume.get().over(share).plus(now.heatLeft().get());
-      out.put(name, seconds, what + "; " + method(), SOURCE, notes(b.run.started() ? "from now" : "from heat-on"));
+      List<String> notes = notes(b.run.started() ? "from now" : "from heat-on");
+      if (name.contains("minimum")) {
+        notes.addAll(floor);
+      }
+      out.put(name, seconds, what + "; " + method(), SOURCE, notes);
     }
   }
 }
