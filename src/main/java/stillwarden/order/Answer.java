@@ -73,17 +73,18 @@ final class Answer {
     boolean notJudged = !judgement.notJudged().isEmpty() || !plan.cycle().isEmpty();
     String verdict = leftOutMatters(leftOut, Verdicts.of(situation, findings, steps, notJudged));
     List<Advice.Action> actions = actions(steps);
-    int shown = everything ? actions.size() : Math.min(MOST_STEPS, actions.size());
+    List<Advice.Question> asked = new Questions(situation).again(openLooks(leftOut)).of(findings, everything);
+    List<Advice.Action> shown = everything ? actions : Cap.most(MOST_STEPS, actions, asked);
     Set<String> gate = gateItems(false);
     return new Advice(
         situation.rig().name(),
         at.map(DateTimeFormatter.ISO_OFFSET_DATE_TIME::format).orElse(""),
         situation.time().stage(),
         verdict,
-        actions.subList(0, shown),
-        actions.size() - shown,
+        shown,
+        actions.size() - shown.size(),
         bans(plan.bans()),
-        new Questions(situation).again(openLooks(leftOut)).of(findings, everything),
+        asked,
         situation.numbers().list(),
         setup ? new Repairs(situation).of(findings) : List.of(),
         leftOut.stream().map(l -> "line " + l.line() + ": " + l.reason()).toList(),
