@@ -27,11 +27,20 @@ final class Fields {
   /** Between braces a comma ends the value: what follows it looks like a key of its own without a value. */
   private static void comma(Node.Field before, Node key, Defects defects) {
     String whole = before.value().text() + ", " + key.text();
+    if (before.value().text().matches("[+-]?[0-9]+") && key.text().matches("[0-9].*")) {
+      defects.add(key.spot(), "a comma in a number; write a point: " + Words.quote(before.value().text() + "." + key.text()));
+      return;
+    }
     defects.add(key.spot(), Words.quote(key.text()) + " has no value; between braces a comma ends a value: if it belongs to "
         + Words.quote(before.key()) + ", put the whole value in quotes, \"" + Words.quote(whole).replace("`", "") + "\"");
   }
 
   private static java.util.Optional<Node.Field> first(List<Node.Field> fields, String key) {
-    return fields.stream().filter(f -> f.key().equals(key)).findFirst();
+    for (Node.Field f : fields) {
+      if (f.key().equals(key)) {
+        return java.util.Optional.of(f);
+      }
+    }
+    return java.util.Optional.empty();
   }
 }

@@ -25,9 +25,12 @@ import java.util.Optional;
  * @param feedRecovery after the last cold feed: until when a weak boil is explained
  * @param feedStopsBoil the last feed was so much that boiling must stop
  * @param boilsFrom when boiling is computed or was seen to begin
- * @param coolsToHandWarm time a flask left standing takes to hand-warm
+ * @param coolsToHandWarm time that a flask left standing takes to hand-warm, at the slow end
+ * @param coolsToQuiet s that it takes to fall as far under its boiling point as the site asks before anything is opened
  * @param jacketWarmsIn time in which a full still jacket reaches the oil's freezing temperature, s
  * @param waterBudget what is short and by how much; empty when enough
+ * @param overfull the flask against its fill limit; empty when within it or when the foam class is unknown
+ * @param receiverTooSmall against the planned distillate
  * @param mantle fit of heater to flask: true fits
  * @param foams foam class, by rig or plant list
  * @param fillLimit share of the flask allowed for this foam class
@@ -54,8 +57,11 @@ public record SideFacts(
     boolean feedStopsBoil,
     Optional<Instant> boilsFrom,
     Optional<Duration> coolsToHandWarm,
+    Optional<Band> coolsToQuiet,
     Optional<Band> jacketWarmsIn,
     Optional<Shortage> waterBudget,
+    Optional<Shortage> overfull,
+    Optional<Shortage> receiverTooSmall,
     Optional<Fit> mantle,
     Optional<String> foams,
     Optional<Double> fillLimit,

@@ -13,6 +13,7 @@ final class TimeNumbers {
   private final Optional<BoilUp> rate;
   private final Progress now;
   private final Numbers.Out out;
+  private final List<String> floor = new ArrayList<>();
 
   private TimeNumbers(Bench b, Optional<BoilUp> rate, Progress now, Numbers.Out out) {
     this.b = b;
@@ -29,6 +30,9 @@ final class TimeNumbers {
     t.target();
     t.time("time-to-reservoir-end", now.reservoir(), "reservoir at the rate at which water boils away", "reservoir.water");
     Optional<Double> minimum = b.volume.map(b::minimumLevel);
+    if (b.volume.isPresent() && minimum.get() > Levels.minimum(b.volume.get(), b.flask.flatMap(f -> f.si("minimum-level")), 0)) {
+      t.floor.add("minimum level raised to what covers the solids");
+    }
     t.time("time-to-minimum-level", minimum.flatMap(m -> now.flask().map(f -> f.minus(Band.of(m)).atLeast(0))),
         "flask above its minimum level, nothing fed", "flask.volume", "charge.water");
     t.time("time-to-dryness", now.flask().map(f -> f.minus(b.charge.displaced()).minus(b.charge.uptake()).atLeast(0)),
@@ -72,7 +76,7 @@ final class TimeNumbers {
       return;
     }
     double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
-    double perCubicMetre = 998 * WaterSteam.warming(from, b.boiling());
+    double perCubicMetre = WaterSteam.COLD_DENSITY * WaterSteam.warming(from, b.boiling());
     out.put("feed-limit", net.get().times(Limits.value("feed-share") / perCubicMetre), "feed that takes a quarter of the net heat", "PRACTICE; IAPWS-IF97", notes());
   }
 
@@ -89,16 +93,22 @@ final class TimeNumbers {
     if (left.isEmpty()) {
       left = b.rig.si("target.oil").flatMap(this::forOil);
     }
+    Optional<Double> planned = b.rig.si("target.time");
+    if (left.isEmpty() && planned.isPresent()) {
+      double gone = b.run.heatSince().map(b.run::secondsSince).orElse(0.0);
+      out.put("time-to-target", Band.of(Math.max(0, planned.get() - gone)), "planned time less time since heat-on", "the rig file", List.of());
+      return;
+    }
     time("time-to-target", left, "what is still to come over", "target.distillate", "target.oil");
   }
 
   /** m3 of distillate that bring a mass of oil. */
   private Optional<Band> forOil(double kilograms) {
-    if (b.course.isEmpty() || b.charge.oilMass().isEmpty() || now.collected().isEmpty()) {
+    if (b.course.isEmpty() || !b.charge.oilAmountKnown() || now.collected().isEmpty()) {
       return Optional.empty();
     }
     double share = kilograms / b.charge.oilMass().get().nominal();
-    Band water = b.diffusion().times(b.course.get().atShare(share).water() / 997);
+    Band water = b.diffusion().times(b.course.get().atShare(share).water() / WaterSteam.COLD_DENSITY);
     return Optional.of(water.minus(now.collected().get()).atLeast(0));
   }
 
@@ -119,7 +129,11 @@ final class TimeNumbers {
       Band share = rate.get().cubicMetres().times(name.contains("receiver") || name.contains("target") ? 1 : rate.get().waterShare());
       boolean none = volume.get().high() == 0;
       Band seconds = none ? Band.of(0) : volume.get().over(share).plus(now.heatLeft().get());
-      out.put(name, seconds, what + "; " + method(), SOURCE, notes(b.run.started() ? "from now" : "from heat-on"));
+      List<String> notes = notes(b.run.started() ? "from now" : "from heat-on");
+      if (name.contains("minimum")) {
+        notes.addAll(floor);
+      }
+      out.put(name, seconds, what + "; " + method(), SOURCE, notes);
     }
   }
 }
