@@ -49,7 +49,11 @@ final class Arrange {
     Map<String, Bar> bars = bars(active);
     Map<String, Step> steps = merged(active);
     replaceWeaker(steps);
-    steps.values().removeIf(s -> barred(s, bars, steps.values()));
+    boolean again = true;
+    while (again) {
+      // a deed that waits for a barred one is barred too, whichever of them is met first
+      again = steps.values().removeIf(s -> barred(s, bars, steps.values()));
+    }
     Set<Edge> edges = edges(active, bars, steps.values());
     List<String> cycle = new ArrayList<>();
     List<Step> sorted = sort(steps.values(), edges, cycle);

@@ -13,15 +13,17 @@ import stillwarden.order.Arranged.Row;
  * reads a rule, the ladder or any other data of the program.
  */
 final class Oracle {
-  private static final Set<String> CUTS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas", "keep-heat-off");
+  private static final Set<String> CUTS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas");
   private static final Set<String> PERSONAL = Set.of(
       "stand-clear", "warn-people", "call-help", "raise-alarm", "evacuate", "get-person", "cool-burn", "rinse-eyes", "stop-work", "hands-off-person", "resuscitate",
       "take-rings-off", "remove-contam", "others-take-over", "move-out", "drop-and-roll", "point-away", "ask-policy", "handover");
   private static final Set<String> LOOKS_AND_PAPER = Set.of(
-      "log", "second-look", "verify-level", "verify-path", "read-baro", "measure", "identify", "inspect-cold", "do-not-start", "end-run", "tag-out", "relabel", "weigh");
+      "log", "keep-heat-off", "second-look", "verify-level", "verify-path", "read-baro", "measure", "identify", "inspect-cold", "do-not-start", "end-run", "tag-out", "relabel", "weigh");
   /** Undone, taken off or pulled out under vapour. */
   private static final Set<String> OPENS = Set.of("unstopper-reservoir", "swap-receiver", "reseat-cold", "take-apart-cold", "draw-off-cold", "replace-item");
   private static final Set<String> WAITS = Set.of("wait-quiet", "let-cool");
+  /** Told as a deed, and done by keeping one's hands off. */
+  private static final Set<String> NO_DEED = Set.of("leave-feed", "coolant-leave-off", "coolant-keep", "continue", "pause");
   private static final Set<String> COLD = Set.of("reseat-cold", "take-apart-cold", "draw-off-cold", "inspect-cold", "cap-cold", "fix-setup", "replace-item");
   private static final Set<String> CLOSES = Set.of("close-feed", "cap-cover", "close-vent-late", "close-tap");
   private static final Set<String> ADDS = Set.of("add-solvent", "prime", "start-gentle-heat");
@@ -100,30 +102,33 @@ final class Oracle {
       return;
     }
     List<String> left = new ArrayList<>(equipment);
-    boolean flammableOut = s.is("vapour-out", "wisps", "plume") || s.is("heater-wet", "oil", "solvent");
-    if (flammableOut && !left.isEmpty() && left.get(0).equals("flame-out")) {
-      left.remove(0);
-    }
-    if (s.is("clamp-slipping", "yes") && !left.isEmpty() && left.get(0).equals("support-load")) {
-      left.remove(0);
-    }
+    // correction 25: flames first only when what can burn is out (on the hot heater too); 14: support before a walk to the switch
+    boolean canBurn = s.is("vapour-out", "wisps", "plume") || s.is("heater-wet", "oil", "solvent");
+    boolean walk = s.is("clamp-slipping", "yes") && s.is("switch", "out-of-reach");
+    left.removeIf(d -> d.equals("flame-out") && (canBurn || s.is("heater-kind", "burner")) || d.equals("support-load") && walk);
     require(!left.isEmpty() && CUTS.contains(left.get(0)), "INV-01 no energy cut first: " + left);
-    if (left.size() > 1 && (left.get(1).equals("flame-out") && s.is("heater-kind", "burner") || left.get(1).equals("support-load"))) {
-      left.remove(1);
-    }
+    // a burner has two energies, gas and the mains of everything else; a load is supported before the heater moves (INV-11)
+    List<String> cuts = left.stream().limit(1).toList();
+    left.removeAll(cuts);
+    left.removeIf(d -> CUTS.contains(d) && s.is("heater-kind", "burner") || d.equals("support-load"));
+    // a flask that cracks wets its heater (correction 25: heater wet and live)
     boolean sash = s.is("pressure-evident", "yes") || fire() || s.is("toxic-release", "yes") || s.is("heater-live-wet", "yes") || s.is("heater-lowers", "no")
-        || s.is("heater-kind", "burner");
-    String second = left.size() > 1 ? left.get(1) : "";
+        || s.is("heater-kind", "burner") || s.is("glass-failing", "yes") || bathWet();
+    String second = left.isEmpty() ? "" : left.get(0);
     require(sash ? second.equals("sash-down") : second.equals("lower-heat"), "INV-01 second is " + second + ", wanted " + (sash ? "sash-down" : "lower-heat"));
   }
 
-  /** INV-03. */
+  private boolean bathWet() {
+    return s.is("bath-spitting", "yes") || s.is("heater-kind", "bath") && s.is("heater-wet", "water");
+  }
+
+  /** INV-03; a receiver that stands free is no closure (corrections 14, 24) while no pressure shows. */
   private void neverOpenUnderPressure() {
     boolean pressed = s.live() && !s.is("path", "open") || s.is("pressure-evident", "yes") && s.is("glass-hot", "yes");
     if (pressed && s.is("pressure-gone", "no")) {
       for (String deed : ids) {
-        boolean cold = COLD.contains(deed);
-        require(!OPENS.contains(deed) || cold || behindAWait(deed), "INV-03 " + deed + " before pressure is verified gone");
+        boolean free = deed.equals("swap-receiver") && s.is("tip-can-be-cleared", "yes") && s.is("pressure-evident", "no") && !s.is("path", "closed");
+        require(!OPENS.contains(deed) || free || COLD.contains(deed) || behindAWait(deed), "INV-03 " + deed + " before pressure is verified gone");
       }
     }
   }
@@ -150,11 +155,16 @@ final class Oracle {
   /** INV-06; correction 24 for vapour at the receiver, 29 for the urgent order. */
   private void tipBeforeCooling() {
     boolean excepted = fire() || hurt() || s.is("receiver-in-vapour", "yes") || s.is("toxic-release", "yes") || s.is("attendance", "nobody")
-        || s.is("vapour-out", "wisps", "plume") || ids.contains("evacuate") || s.is("tip-can-be-cleared", "no") || !s.is("tip-can-be-cleared", "yes");
+        || s.is("vapour-out", "wisps", "plume") || plugged() || ids.contains("evacuate") || s.is("tip-can-be-cleared", "no") || !s.is("tip-can-be-cleared", "yes");
     if (s.live() && s.is("tip", "under-liquid") && s.is("path", "open") && !excepted) {
       require(inOrder("lower-receiver", "lower-heat"), "INV-06 lower-heat before the tip is clear");
       require(inOrder("lower-receiver", "wait-quiet"), "INV-06 wait-quiet before the tip is clear");
     }
+  }
+
+  /** Crystals and no drip are a plug, whatever the last look at the way said (correction 2). */
+  private boolean plugged() {
+    return s.is("crystals", "film", "growing", "blocking") && s.is("flow", "none", "slowing") || s.is("crystals", "blocking") || s.is("coolant-watch", "failed");
   }
 
   /** INV-09. */
@@ -220,11 +230,9 @@ final class Oracle {
   /** INV-16. */
   private void peopleFirst() {
     if (hurt() && s.is("glass-hot", "yes") && !steps.isEmpty()) {
-      require(!ids.isEmpty() && (PERSONAL.contains(ids.get(0)) || CUTS.contains(ids.get(0))), "INV-16 first is " + ids.get(0));
-      int back = 0;
+      require(!ids.isEmpty() && (PERSONAL.contains(ids.get(0)) || CUTS.contains(ids.get(0))), "INV-16 first is " + (ids.isEmpty() ? "nothing" : ids.get(0)));
       for (String deed : equipment) {
-        boolean onTheWay = CUTS.contains(deed) || deed.equals("flame-out") || deed.equals("sash-down") || deed.equals("leave-feed") || deed.equals("coolant-leave-off") || deed.equals("continue");
-        back += onTheWay || COLD.contains(deed) ? 0 : 1;
+        boolean onTheWay = CUTS.contains(deed) || deed.equals("flame-out") || deed.equals("sash-down") || NO_DEED.contains(deed);
         require(onTheWay || COLD.contains(deed), "INV-16 " + deed + " sends a hurt person back");
       }
     }
@@ -234,9 +242,9 @@ final class Oracle {
   private void toxic() {
     if (s.is("toxic-release", "yes") && s.is("glass-hot", "yes")) {
       require(ids.contains("evacuate") && ids.contains("raise-alarm"), "INV-17 nobody is sent out");
-      require(equipment.stream().filter(CUTS::contains).count() <= 1, "INV-17 more than one energy cut");
+      require(equipment.stream().filter(CUTS::contains).count() <= (s.is("heater-kind", "burner") ? 2 : 1), "INV-17 more than one energy cut");
       for (String deed : equipment) {
-        boolean allowed = CUTS.contains(deed) || Set.of("sash-down", "flame-out", "leave-feed", "coolant-leave-off").contains(deed);
+        boolean allowed = CUTS.contains(deed) || NO_DEED.contains(deed) || Set.of("sash-down", "flame-out").contains(deed);
         require(allowed || COLD.contains(deed), "INV-17 " + deed + " at the rig in poison");
       }
     }
@@ -263,6 +271,6 @@ final class Oracle {
       boolean action = !bar.until().isEmpty() && !bar.until().contains(" ");
       require(!action || inOrder(bar.until(), bar.deed()), bar.deed() + " ahead of " + bar.until());
     }
-    require(ids.stream().filter(CUTS::contains).filter(c -> !c.equals("keep-heat-off") && !c.equals("isolate-auto")).count() <= 1, "INV-25 two energy cuts: " + ids.stream().filter(CUTS::contains).toList());
+    require(ids.stream().filter(CUTS::contains).count() <= (s.is("heater-kind", "burner") ? 2 : 1), "INV-25 two energy cuts: " + ids.stream().filter(CUTS::contains).toList());
   }
 }

@@ -254,6 +254,16 @@ final class StateSpace {
 
   /** What the makers work out from other words. */
   private static void tie(State s) {
+    if (s.is("coolant", "running", "low") && s.is("jacket", "empty-hot", "empty-cool")) {
+      s.seen("jacket", "full-cool");
+    }
+    if (s.is("receiver-closes-vent", "yes")) {
+      s.seen("path", "closed");
+      s.seen("level-and-path", "in-doubt");
+    }
+    if (s.is("joint-apart", "yes") && s.is("path", "closed")) {
+      s.absent("joint-apart");
+    }
     if (s.is("path", "open") && s.known.containsKey("last-opening")) {
       s.seen("last-opening", "no");
     }
