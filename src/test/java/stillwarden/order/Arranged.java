@@ -21,9 +21,9 @@ public final class Arranged {
 
   private Arranged() {}
 
-  /** Exactly what the answer arranges: active findings, and in a run none that only holds a start. */
+  /** Exactly what the answer arranges: active findings, and of what only holds a start nothing but its bans once heat is on. */
   public static Plan of(Collection<Finding> findings, boolean setup) {
-    List<Finding> acted = findings.stream().filter(f -> f.isActive() && (setup || !Verdicts.gate(f))).toList();
+    List<Finding> acted = findings.stream().filter(Finding::isActive).map(f -> setup || !Verdicts.gate(f) ? f : f.bansOnly()).toList();
     Arrange.Plan plan = new Arrange(s -> Double.MAX_VALUE, s -> 0).arrange(acted);
     List<Row> rows = new ArrayList<>();
     plan.steps().forEach(s -> rows.add(new Row(s.id(), s.part, s.iff, s.signal().name(), List.copyOf(s.reasons))));

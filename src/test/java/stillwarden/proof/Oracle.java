@@ -13,6 +13,10 @@ import stillwarden.order.Arranged.Row;
  * reads a rule, the ladder or any other data of the program.
  */
 final class Oracle {
+  /** What each message begins with. */
+  static final List<String> NAMES = List.of(
+      "INV-01", "INV-03", "INV-04", "INV-05", "INV-06", "INV-09", "INV-10", "INV-11", "INV-12", "INV-13", "INV-14", "INV-15", "INV-16", "INV-17", "INV-21", "INV-25");
+
   private static final Set<String> CUTS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas");
   private static final Set<String> PERSONAL = Set.of(
       "stand-clear", "warn-people", "call-help", "raise-alarm", "evacuate", "get-person", "cool-burn", "rinse-eyes", "stop-work", "hands-off-person", "resuscitate",
@@ -103,7 +107,7 @@ final class Oracle {
     }
     List<String> left = new ArrayList<>(equipment);
     // correction 25: flames first only when what can burn is out (on the hot heater too); 14: support before a walk to the switch
-    boolean canBurn = s.is("vapour-out", "wisps", "plume") || s.is("heater-wet", "oil", "solvent");
+    boolean canBurn = !s.is("vapour-out", "none") || s.is("heater-wet", "oil", "solvent");
     boolean walk = s.is("clamp-slipping", "yes") && s.is("switch", "out-of-reach");
     left.removeIf(d -> d.equals("flame-out") && (canBurn || s.is("heater-kind", "burner")) || d.equals("support-load") && walk);
     require(!left.isEmpty() && CUTS.contains(left.get(0)), "INV-01 no energy cut first: " + left);
@@ -113,7 +117,7 @@ final class Oracle {
     left.removeIf(d -> CUTS.contains(d) && s.is("heater-kind", "burner") || d.equals("support-load"));
     // a flask that cracks wets its heater (correction 25: heater wet and live)
     boolean sash = s.is("pressure-evident", "yes") || fire() || s.is("toxic-release", "yes") || s.is("heater-live-wet", "yes") || s.is("heater-lowers", "no")
-        || s.is("heater-kind", "burner") || s.is("glass-failing", "yes") || bathWet();
+        || s.is("heater-kind", "burner") || s.is("glass-failing", "yes") || bathWet() || s.is("heater-wet", "oil", "solvent");
     String second = left.isEmpty() ? "" : left.get(0);
     require(sash ? second.equals("sash-down") : second.equals("lower-heat"), "INV-01 second is " + second + ", wanted " + (sash ? "sash-down" : "lower-heat"));
   }
@@ -267,9 +271,9 @@ final class Oracle {
       require(COLD.contains(row.id()) || twice.add(row.id() + row.part()), "INV-25 " + row.id() + " twice");
     }
     for (Bar bar : bars) {
-      require(!bar.until().isEmpty() || !ids.contains(bar.deed()), "a ban does not beat " + bar.deed());
+      require(!bar.until().isEmpty() || !ids.contains(bar.deed()), "INV-25 a ban does not beat " + bar.deed());
       boolean action = !bar.until().isEmpty() && !bar.until().contains(" ");
-      require(!action || inOrder(bar.until(), bar.deed()), bar.deed() + " ahead of " + bar.until());
+      require(!action || inOrder(bar.until(), bar.deed()), "INV-25 " + bar.deed() + " ahead of " + bar.until());
     }
     require(ids.stream().filter(CUTS::contains).count() <= (s.is("heater-kind", "burner") ? 2 : 1), "INV-25 two energy cuts: " + ids.stream().filter(CUTS::contains).toList());
   }

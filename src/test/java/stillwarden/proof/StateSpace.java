@@ -45,19 +45,57 @@ final class StateSpace {
     domains.keySet().stream().filter(a -> !derived.contains(a) && saw.get(a) instanceof Map<?, ?> m && "event".equals(m.get("kind"))).forEach(events::add);
   }
 
-  State draw(SplittableRandom r) {
-    Map<String, String> wanted = r.nextInt(3) > 0 ? wanted(rules.get(r.nextInt(rules.size())), r) : Map.of();
-    double odd = new double[] {0.01, 0.05, 0.15, 0.4}[r.nextInt(4)];
+  /** A full state near the last one: two in three keep most of their words, which costs the engine less. */
+  State step(State last, SplittableRandom r) {
+    if (last == null || r.nextInt(12) == 0) {
+      return draw(r);
+    }
+    Rule rule = rules.get(r.nextInt(rules.size()));
+    Map<String, String> wanted = r.nextInt(3) > 0 ? wanted(rule, r) : Map.of();
+    double odd = new double[] {0.05, 0.15, 0.4}[r.nextInt(3)];
+    State s = last.copy();
+    if (r.nextInt(3) == 0 || !holds(s, wanted)) {
+      State c = suiting(r, odd, wanted);
+      CORE.forEach(s::absent);
+      s.known.putAll(c.known);
+    }
+    List<String> words = List.copyOf(domains.keySet());
+    for (int i = 0; i < 10; i++) {
+      String about = words.get(r.nextInt(words.size()));
+      if (!CORE.contains(about)) {
+        s.absent(about);
+        free(s, about, r, odd);
+      }
+    }
+    force(s, wanted, r);
+    tie(s);
+    return s;
+  }
+
+  private State suiting(SplittableRandom r, double odd, Map<String, String> wanted) {
     State s = core(r, odd, wanted);
     for (int i = 0; i < 300 && !holds(s, wanted); i++) {
       s = core(r, i > 20 ? 0.4 : odd, wanted);
     }
+    return s;
+  }
+
+  State draw(SplittableRandom r) {
+    Map<String, String> wanted = r.nextInt(3) > 0 ? wanted(rules.get(r.nextInt(rules.size())), r) : Map.of();
+    double odd = new double[] {0.01, 0.05, 0.15, 0.4}[r.nextInt(4)];
+    State s = suiting(r, odd, wanted);
     boolean goodSetUp = r.nextBoolean();
     for (String about : domains.keySet()) {
       if (!CORE.contains(about)) {
         free(s, about, r, goodSetUp && about.contains(".") ? 0 : odd);
       }
     }
+    force(s, wanted, r);
+    tie(s);
+    return s;
+  }
+
+  private static void force(State s, Map<String, String> wanted, SplittableRandom r) {
     for (Map.Entry<String, String> w : wanted.entrySet()) {
       if (!CORE.contains(w.getKey())) {
         if (r.nextInt(5) == 0) {
@@ -67,8 +105,6 @@ final class StateSpace {
         }
       }
     }
-    tie(s);
-    return s;
   }
 
   private static Map<String, String> wanted(Rule rule, SplittableRandom r) {

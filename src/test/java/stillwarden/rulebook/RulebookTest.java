@@ -238,7 +238,7 @@ class RulebookTest {
         deed(r, c, forbidden);
       }
     }
-    Rulebook.yaml("rules/groups.yaml").forEach((g, ids) -> ((List<?>) ids).forEach(id -> wrong(!ACTIONS.contains(id.toString()), g + ": no action `" + id + "`")));
+    Rulebook.yaml("rules/groups.yaml").forEach((g, ids) -> ((List<?>) ids).forEach(id -> wrong(!forbidden.contains(id.toString()), g + ": no deed `" + id + "`")));
     none();
   }
 
