@@ -19,6 +19,11 @@ final class Defects {
     }
   }
 
+  /** True when no more would be told: then looking for the nearest word is work for nothing. */
+  boolean full() {
+    return found.size() >= MOST;
+  }
+
   void throwIfAny() throws Unusable {
     if (!found.isEmpty()) {
       throw unusable();

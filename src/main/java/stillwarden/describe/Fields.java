@@ -32,6 +32,11 @@ final class Fields {
   }
 
   private static java.util.Optional<Node.Field> first(List<Node.Field> fields, String key) {
-    return fields.stream().filter(f -> f.key().equals(key)).findFirst();
+    for (Node.Field f : fields) {
+      if (f.key().equals(key)) {
+        return java.util.Optional.of(f);
+      }
+    }
+    return java.util.Optional.empty();
   }
 }

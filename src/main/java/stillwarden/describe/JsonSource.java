@@ -87,6 +87,7 @@ final class JsonSource {
       limits.string(key.text(), key.spot());
       parser.nextToken();
       Fields.add(fields, key, node(depth + 1), false, defects);
+      limits.entries(fields.size(), spot);
     }
     return Node.map(List.copyOf(fields), spot, false);
   }
@@ -95,6 +96,7 @@ final class JsonSource {
     List<Node> items = new ArrayList<>();
     while (parser.nextToken() != JsonToken.END_ARRAY) {
       items.add(node(depth + 1));
+      limits.entries(items.size(), spot);
     }
     return Node.list(List.copyOf(items), spot, false);
   }

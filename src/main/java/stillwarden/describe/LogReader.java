@@ -21,7 +21,7 @@ import java.util.Set;
 public final class LogReader {
   private static final int MOST_BYTES = 64 * 1024 * 1024;
   private static final int MOST_BYTES_A_LINE = 64 * 1024;
-  private static final Limits LINE = new Limits(8, 8 * 1024);
+  private static final Limits LINE = new Limits(8, 8 * 1024, 100);
 
   private final String file;
   private final LogLine lines;

@@ -51,7 +51,12 @@ record Node(Kind kind, String text, List<Field> fields, List<Node> items, Spot s
   }
 
   Optional<Field> field(String key) {
-    return fields.stream().filter(f -> f.key.equals(key)).findFirst();
+    for (Field f : fields) {
+      if (f.key.equals(key)) {
+        return Optional.of(f);
+      }
+    }
+    return Optional.empty();
   }
 
   Optional<Node> get(String key) {

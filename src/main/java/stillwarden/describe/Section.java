@@ -71,6 +71,9 @@ record Section(Map<String, Key> keys, String where, String prefix, List<String> 
   }
 
   private void unknown(Node.Field f, String at) {
+    if (defects.full()) {
+      return;
+    }
     Set<String> known = names(at);
     known.addAll(at.isEmpty() ? besides : List.of());
     String place = at.isEmpty() ? where : "`" + prefix + at.substring(0, at.length() - 1) + "`";

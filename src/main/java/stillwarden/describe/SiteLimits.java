@@ -23,11 +23,15 @@ public final class SiteLimits {
   public record Limit(
       String key, Optional<Double> value, Optional<Dimension> dimension, List<String> words, String tighter, boolean danger, String guards, String source) {
 
-    /** True when {@code si} lets pass what the default would not. */
+    /** True when {@code si} lets pass what the default would not; never where neither way is the tighter one. */
     public boolean looser(double si) {
       double d = value.orElseThrow();
       double rounding = Math.abs(d) * 1e-9;
-      return tighter.equals("up") ? si < d - rounding : si > d + rounding;
+      return switch (tighter) {
+        case "up" -> si < d - rounding;
+        case "down" -> si > d + rounding;
+        default -> false;
+      };
     }
   }
 

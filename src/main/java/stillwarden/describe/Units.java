@@ -31,7 +31,8 @@ public final class Units {
   /** SI = (number + plus) x times, times as a ratio so that 1/60 stays exact. */
   private record Code(BigDecimal plus, BigDecimal times, BigDecimal per) {
     double si(BigDecimal number) {
-      return number.add(plus).multiply(times).divide(per, MathContext.DECIMAL128).doubleValue();
+      BigDecimal product = number.add(plus).multiply(times);
+      return per.equals(BigDecimal.ONE) ? product.doubleValue() : product.divide(per, MathContext.DECIMAL128).doubleValue();
     }
   }
 

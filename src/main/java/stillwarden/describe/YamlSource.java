@@ -2,7 +2,10 @@ package stillwarden.describe;
 
 import java.util.ArrayList;
 import java.util.Iterator;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
+import java.util.Map;
 import java.util.NoSuchElementException;
 import java.util.Optional;
 import org.snakeyaml.engine.v2.api.LoadSettings;
@@ -21,6 +24,9 @@ import org.snakeyaml.engine.v2.exceptions.YamlEngineException;
  * (aliases, anchors, merge keys, tags, a second document, a repeated key) can only be refused there.
  */
 final class YamlSource {
+  /** What the parser says, and what it means to somebody who writes a rig file; the first that fits. */
+  private static final Map<String, String> WORDINGS = wordings();
+
   private final String file;
   private final Limits limits;
   private final Defects defects;
@@ -32,6 +38,21 @@ final class YamlSource {
     this.defects = defects;
     LoadSettings settings = LoadSettings.builder().setLabel(file).setAllowDuplicateKeys(true).setParseComments(false).build();
     events = new Parse(settings).parseString(text).iterator();
+  }
+
+  private static Map<String, String> wordings() {
+    Map<String, String> out = new LinkedHashMap<>();
+    out.put("TAB", "a tab where spaces are wanted");
+    out.put("\\t", "a tab where spaces are wanted");
+    out.put("mapping values are not allowed", "a `:` where none can be; put the value in quotes if the colon belongs to it");
+    out.put("quoted scalar", "a quote is not closed");
+    out.put("expected <block end>", "the indentation does not fit the lines above");
+    out.put("flow mapping", "a `,` or a closing `}` is missing");
+    out.put("flow sequence", "a `,` or a closing `]` is missing");
+    out.put("could not find expected ':'", "a `:` is missing after a key");
+    out.put("cannot start any token", "a value begins with a character that YAML keeps for itself; put it in quotes");
+    out.put("special characters are not allowed", "a character that can't be printed");
+    return out;
   }
 
   /** The one document of the text; what is wrong but leaves it readable goes to {@code defects}. */
@@ -47,9 +68,9 @@ final class YamlSource {
   }
 
   private static String wording(MarkedYamlEngineException e) {
-    String problem = String.valueOf(e.getProblem()).replaceAll("\\s+", " ");
-    return problem.contains("\\t") || problem.contains("TAB")
-        ? "a tab where spaces are wanted" : Words.quote(problem).replace("`", "").toLowerCase(java.util.Locale.ROOT);
+    String problem = (e.getContext() + " " + e.getProblem()).replaceAll("\\s+", " ");
+    return WORDINGS.entrySet().stream().filter(w -> problem.contains(w.getKey())).map(Map.Entry::getValue).findFirst()
+        .orElse(Words.quote(String.valueOf(e.getProblem())).replace("`", "").toLowerCase(Locale.ROOT));
   }
 
   private Node document() throws Unusable {
@@ -109,6 +130,7 @@ final class YamlSource {
       Node key = node(e, depth + 1);
       Node value = node(events.next(), depth + 1);
       Fields.add(fields, key, value, start.isFlow(), defects);
+      limits.entries(fields.size(), spot(start));
     }
     return Node.map(List.copyOf(fields), spot(start), start.isFlow());
   }
@@ -117,6 +139,7 @@ final class YamlSource {
     List<Node> items = new ArrayList<>();
     for (Event e = events.next(); e.getEventId() != Event.ID.SequenceEnd; e = events.next()) {
       items.add(node(e, depth + 1));
+      limits.entries(items.size(), spot(start));
     }
     return Node.list(List.copyOf(items), spot(start), start.isFlow());
   }

@@ -23,7 +23,7 @@ public record PlanSheet(
     waivers = List.copyOf(waivers);
   }
 
-  /** A course in time: {@code t} in seconds, values in {@code unit}; all four lists of one length. */
+  /** A course in time: {@code t} in minutes from heat on, values in {@code unit}; all four lists of one length. */
   public record Curve(String name, String unit, List<Double> t, List<Double> low, List<Double> value, List<Double> high) {
     public Curve {
       t = List.copyOf(t);

@@ -56,7 +56,7 @@ class PolicyReaderTest {
   void aLooserLimitIsRefusedNamingBothValues() {
     assertThat(refused("limits: { flask-fill-max: 60 % }\n"))
         .isEqualTo("`60 %` for `flask-fill-max` is looser than 50 %, which holds without a policy; loosening it needs an entry in `waivers`");
-    assertThat(refused("limits: { time-to-minimum-min: 1 min }\n")).contains("looser than 300 s").contains("guards life and takes no waiver");
+    assertThat(refused("limits: { quiet-time-min: 1 min }\n")).contains("looser than 300 s").contains("guards life and takes no waiver");
     assertThat(refused("limits: { jacket-cold-start-max: 70 Cel }\n")).contains("looser than 60 Cel");
   }
 

@@ -177,6 +177,26 @@ class RigReaderTest {
   }
 
   @Test
+  void manyKeysAreRefusedBeforeTheyCost() throws Exception {
+    StringBuilder keys = new StringBuilder("parts:\n");
+    for (int i = 0; i < 20_000; i++) {
+      keys.append("  p").append(i).append(": 1\n");
+    }
+    assertThat(refused(keys.toString())).contains("more than 1000 entries");
+    StringBuilder json = new StringBuilder("{\"format\":\"stillwarden/rig/1\",\"joints\":[0");
+    assertThat(refused(file("t.rig.json", json.append(",0".repeat(2000)).append("]}").toString()))).contains("more than 1000 entries");
+  }
+
+  @Test
+  void noMoreThanTwoHundredDefectsAreTold() throws Exception {
+    StringBuilder keys = new StringBuilder();
+    for (int i = 0; i < 900; i++) {
+      keys.append("k").append(i).append(": 1\n");
+    }
+    assertThat(refused(keys.toString()).lines()).hasSize(200);
+  }
+
+  @Test
   void aByteOrderMarkAndWindowsLineEndsAreTaken() throws Exception {
     assertThat(read("\uFEFF" + HEAD.replace("\n", "\r\n") + "name: Bench\r\n").name()).isEqualTo("Bench");
   }
@@ -262,6 +282,27 @@ class RigReaderTest {
   void oneThingSaidTwiceAndDifferentlyIsRefused() throws Exception {
     assertThat(refused("parts:\n  t: { kind: vacuum-adapter, side-arm: open }\nopenings: { t.side-arm: stoppered }\n"))
         .contains("`openings.t.side-arm` is `stoppered`, but `t.side-arm` is `open` in line 3");
+  }
+
+  @Test
+  void whatStandsFreeIsInNoJoint() throws Exception {
+    String parts = "parts:\n  t: { kind: vacuum-adapter, side-arm: open }\n  r: { kind: beaker, held: free }\n  h: { kind: vent-hose }\n";
+    assertThat(refused(parts + "joints: [ { joins: [t.outlet, r] } ]\n")).isEqualTo("t.rig.yaml:4:28: `r.held` is `free`, but `r.mouth` is in joint 1");
+    assertThat(refused(parts + "joints: [ { joins: [t.side-arm, h.inlet] } ]\n")).contains("`t.side-arm` is `open`, but `t.side-arm` is in joint 1");
+  }
+
+  @ParameterizedTest(name = "{0}")
+  @CsvSource(delimiter = '|', quoteCharacter = '^', value = {
+      "name: a: b                          | a `:` where none can be",
+      "name: 'a                            | a quote is not closed",
+      "place: { room: 21 Cel               | a `,` or a closing `}` is missing",
+      "joints: [ a                         | a `,` or a closing `]` is missing",
+      "name: %a                            | put it in quotes",
+      "name: @a                            | put it in quotes",
+      "^place:\n  room: 21 Cel\n hood: x^  | the indentation does not fit",
+  })
+  void aFaultOfYamlIsToldInWordsOfTheTrade(String text, String wanted) throws IOException {
+    assertThat(refused(text + "\n")).contains(wanted);
   }
 
   @Test
