@@ -177,16 +177,29 @@ final class CondenserSigns {
       return;
     }
     if (fill.isEmpty()) {
-      if (!scene.time().vapour(scene.at()) || coolant.equals("unknown")) {
-        out.possible("jacket", "nobody has looked at the jacket", "jacket");
-      } else {
-        out.counted("jacket", "empty-hot", "nobody has looked at the jacket: counts as empty and hot", "jacket");
-      }
+      unseenJacket(coolant, hot, feels);
       return;
     }
     boolean full = fill.get().text().equals("full");
     boolean warm = hot.orElse(vapourWithoutCoolantOverAMinute());
     out.seen("jacket", "", (full ? "full" : "empty") + (warm ? "-hot" : "-cool"), scene.told(fill.get()) + feels.map(f -> ", " + scene.told(f)).orElse(""), fill.get().at(), "jacket");
+  }
+
+  /** A jacket that was shut off, not drained, is still full; one that lost its flow nobody knows how is not counted on. */
+  private void unseenJacket(String coolant, Optional<Boolean> hot, Optional<Entry> feels) {
+    Optional<Entry> shut = scene.run().lastDid("coolant-stop", "jacket-drain").filter(e -> e.id().equals("coolant-stop"));
+    boolean ran = scene.is(Role.CONDENSER, "coolant.flow-proven", "yes") || scene.run().saw("coolant-running").stream().anyMatch(e -> e.text().equals("yes"));
+    String how = feels.map(scene::told).orElse("nobody has looked at the jacket");
+    if (shut.isPresent() && ran) {
+      boolean warm = hot.orElse(vapourWithoutCoolantOverAMinute());
+      out.seen("jacket", "", warm ? "full-hot" : "full-cool", scene.told(shut.get()) + ", not drained since", shut.get().at(), "jacket");
+    } else if (hot.isPresent()) {
+      out.seen("jacket", "", (ran ? "full" : "empty") + (hot.get() ? "-hot" : "-cool"), how, feels.get().at(), "jacket");
+    } else if (!scene.time().vapour(scene.at()) || coolant.equals("unknown")) {
+      out.possible("jacket", how, "jacket");
+    } else {
+      out.counted("jacket", "empty-hot", how + ": counts as empty and hot", "jacket");
+    }
   }
 
   private boolean vapourWithoutCoolantOverAMinute() {
@@ -196,17 +209,33 @@ final class CondenserSigns {
     return Duration.between(start, scene.at()).compareTo(Duration.ofMinutes(1)) > 0;
   }
 
-  /** Melting: crystals were growing with the drip going on, the coolant was shut for that, and the computed time is not over. */
+  /**
+   * Melting crystals: the coolant was shut for solid that was seen, it drips, no vapour is out and the computed time is
+   * not over. Melted when no solid is seen any more; failed when the drip slows, the time is over or vapour comes.
+   */
   private void watch() {
-    Optional<Entry> stop = scene.run().lastDid("coolant-stop");
-    boolean crystals = stop.isPresent() && scene.run().saw("condenser-solids").stream().anyMatch(
+    Optional<Entry> solids = scene.run().lastSaw("condenser-solids");
+    boolean solid = solids.filter(e -> Set.of("film", "growing").contains(e.text())).isPresent();
+    String flow = out.all().stream().filter(x -> x.about().equals("flow") && x.isActive()).map(Sign::value).findFirst().orElse("");
+    Optional<Entry> stop = scene.run().lastDid("coolant-stop", "coolant-on", "coolant-start-slow", "set-coolant").filter(e -> e.id().equals("coolant-stop"));
+    boolean shut = stop.isPresent() && scene.run().saw("condenser-solids").stream().anyMatch(
         e -> Set.of("film", "growing").contains(e.text()) && !e.at().isAfter(stop.get().at()) && e.at().isAfter(stop.get().at().minus(Duration.ofMinutes(10))));
-    Duration time = scene.numbers().meltTime().orElse(scene.limitTime("melt-watch-max"));
-    boolean running = crystals && !stop.get().at().plus(time).isBefore(scene.at());
-    if (running) {
-      out.seen("coolant-watch", "", "melting", "coolant shut " + scene.clock(stop.get().at()) + " to melt crystals, for " + time.toSeconds() + " s", stop.get().at(), "condenser-solids");
+    if (solid && flow.equals("slowing")) {
+      out.seen("coolant-watch", "", "failed", scene.told(solids.get()) + ", and the drip slows", solids.get().at(), "condenser-solids");
+    } else if (!shut || flow.equals("none")) {
+      out.seen("coolant-watch", "normal", "no melting under way");
     } else {
-      out.seen("coolant-watch", "normal", crystals ? "the time for melting is over" : "no melting under way");
+      melting(stop.get(), solids.get());
     }
+  }
+
+  private void melting(Entry stop, Entry solids) {
+    Duration time = scene.numbers().meltTime().orElse(scene.limitTime("melt-watch-max"));
+    boolean over = stop.at().plus(time).isBefore(scene.at());
+    boolean vapour = scene.run().lastSaw("vapour-past-condenser").filter(e -> !e.text().equals("none") && !e.at().isBefore(stop.at())).isPresent()
+        || scene.run().lastSaw("vapour-front").filter(e -> e.text().equals("last-third") && !e.at().isBefore(stop.at())).isPresent();
+    boolean gone = solids.text().equals("none") && !solids.at().isBefore(stop.at());
+    String value = vapour || over ? "failed" : gone ? "melted" : "melting";
+    out.seen("coolant-watch", "", value, "coolant shut " + scene.clock(stop.at()) + " to melt crystals, for " + time.toSeconds() + " s; " + scene.told(solids), stop.at(), "condenser-solids");
   }
 }

@@ -6,6 +6,7 @@ import java.util.Map;
 import java.util.Set;
 import stillwarden.describe.Entry;
 import stillwarden.describe.Key;
+import stillwarden.describe.Knowledge;
 import stillwarden.describe.Observation;
 import stillwarden.describe.Vocabulary;
 
@@ -51,12 +52,23 @@ final class EventSigns {
   private void sign(Observation o, Entry e) {
     List<String> values = o.key().values();
     if (e.text().equals(Looks.NOT_SURE)) {
-      String worst = values.get(values.size() - 1);
-      out.counted(o.id(), worst, scene.told(e) + ", counts as " + worst, o.id());
+      notSure(o, e);
       return;
     }
     String value = e.measured().isPresent() && !values.contains(e.text()) ? (e.measured().get().si() > 0 ? "yes" : "no") : e.text();
     out.seen(o.id(), e.part(), value, scene.told(e), since(o, e), o.id());
+  }
+
+  /** A yes or no that nobody is sure of counts as the worse; of several words the one that the vocabulary names, else all are asked. */
+  private void notSure(Observation o, Entry e) {
+    List<String> values = o.key().values();
+    String counts = Knowledge.section("words").get("log").get("saw").get(o.id()).text("not-sure").orElse(o.key().type() == Key.Type.TRI ? values.get(values.size() - 1) : "");
+    if (counts.isEmpty() || counts.equals("ask")) {
+      out.possible(o.id(), e.part(), values, scene.told(e), List.of(o.id()));
+    } else {
+      out.counted(o.id(), counts, scene.told(e) + ", counts as " + counts, o.id());
+      out.possible(o.id(), e.part(), values.subList(1, values.size()).stream().filter(v -> !v.equals(counts)).toList(), scene.told(e), List.of(o.id()));
+    }
   }
 
   /** When the value began that holds now. */

@@ -110,7 +110,7 @@ final class Exits {
     if (graph.hasRole(part.name())) {
       graph.unlisted.add(port);
     }
-    return graph.rig.nothingElse() ? Gate.OPEN : Gate.unknown(graph.name(port), "is in no joint, and nobody said whether it is open", path(port));
+    return graph.rig.nothingElse() && !sideArm(port) ? Gate.OPEN : Gate.unknown(graph.name(port), "is in no joint, and nobody said whether it is open", path(port));
   }
 
   /** A jointed receiver's own way to the air, which its liquid can close. */
@@ -198,5 +198,10 @@ final class Exits {
       case "caked" -> Gate.closed(part.name(), "has its drying tube caked");
       default -> Gate.unknown(part.name(), "may have its drying tube caked", Look.DRYING_TUBE.id());
     };
+  }
+
+  /** The vent arm of a take-off is asked for even where nothing else is on the bench: it is the way out. */
+  private boolean sideArm(Port port) {
+    return port.port().equals("side-arm") && graph.is(port.part(), Role.TAKE_OFF);
   }
 }

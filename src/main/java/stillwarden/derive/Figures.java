@@ -12,12 +12,16 @@ import stillwarden.derive.physics.JointFit;
 import stillwarden.derive.physics.Levels;
 import stillwarden.derive.physics.Numbers;
 import stillwarden.derive.physics.SideFacts;
+import stillwarden.describe.Entry;
 import stillwarden.describe.Joint;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Rig;
 
 /** The computed numbers as the sign makers ask for them: each against its limit, in one word, with why. */
 final class Figures {
+  /** Two reading errors of 3 % of the vessel each. */
+  private static final double SUDDEN_SHARE = 0.06;
+
   private final Rig rig;
   private final Policy policy;
   private final Roles roles;
@@ -44,9 +48,22 @@ final class Figures {
 
   /** What to ask for, for a number that cannot be had. */
   List<String> missing(String name) {
-    return numbers.all().containsKey(name) ? numbers.get(name).missing() : switch (name) {
+    List<String> own = numbers.all().containsKey(name) ? numbers.get(name).missing() : List.of();
+    return own.isEmpty() ? candidates(name).stream().filter(p -> rig.datum(p).isEmpty()).toList() : own;
+  }
+
+  private List<String> candidates(String name) {
+    String flask = name(Role.FLASK);
+    String condenser = name(Role.CONDENSER);
+    String reservoir = name(Role.RESERVOIR);
+    return switch (name) {
+      case "flask-fill" -> List.of("charge.water", flask + ".volume", "charge.material-mass", "charge.foams");
+      case "condenser-capacity" -> List.of(condenser + ".jacket-length", condenser + ".tube-bore", condenser + ".coolant.supply", name(Role.HEATER) + ".power");
       case "receiver-capacity" -> List.of(name(Role.RECEIVER) + ".volume", "target.distillate");
-      case "mantle-fit" -> List.of(name(Role.HEATER) + ".fits", name(Role.FLASK) + ".volume");
+      case "mantle-fit" -> List.of(name(Role.HEATER) + ".fits", flask + ".volume");
+      case "water-needed" -> List.of("charge.water", reservoir + ".water", "charge.plant", "charge.oil.expected", "target.distillate");
+      case "coolant-strategy" -> List.of(condenser + ".coolant.plan", condenser + ".coolant.supply", "place.warm-water", "charge.plant");
+      case "boiling-point-here" -> List.of("charge.plant");
       default -> List.of();
     };
   }
@@ -58,6 +75,9 @@ final class Figures {
   String oilFreezes() {
     if (facts.oil().isEmpty()) {
       return "";
+    }
+    if (facts.liquidusHighest().isEmpty() && facts.coolant().isPresent() && inlet().isPresent() && facts.coolant().get().strategy().equals("before-heat")) {
+      return "no";
     }
     return facts.coolant().flatMap(c -> facts.liquidusNow().flatMap(l -> inlet().map(in -> in < l.high() ? "yes" : in < l.high() + margin() ? "band" : "no")))
         .orElse("");
@@ -78,15 +98,19 @@ final class Figures {
   }
 
   String freezesInTakeOff() {
+    if (rig.datum("place.room").isEmpty() && run.lastSaw("room-temperature").isEmpty()) {
+      return "";
+    }
     return facts.freezesInTakeOff().map(b -> b ? "yes" : "no").orElse("");
   }
 
   Optional<Duration> meltTime() {
-    return facts.jacketWarmsIn().map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
+    // coolant already warmer than the computed freezing point explains no crystals: then the limit decides
+    return facts.jacketWarmsIn().filter(b -> b.high() > 1).map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
   }
 
   Optional<Duration> coolingTime() {
-    return facts.coolsToHandWarm();
+    return facts.coolsToHandWarm().map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
   }
 
   /** Until when a weak boil is explained by the last feed. */
@@ -113,7 +137,8 @@ final class Figures {
   }
 
   String waterBudget() {
-    return numbers.get("water-available").known() && numbers.get("water-needed").known() ? facts.waterBudget().isPresent() ? "short" : "ok" : "";
+    boolean told = roles.one(Role.RESERVOIR).isEmpty() || rig.datum(name(Role.RESERVOIR) + ".water").isPresent();
+    return told && numbers.get("water-available").known() && numbers.get("water-needed").known() ? facts.waterBudget().isPresent() ? "short" : "ok" : "";
   }
 
   String coolantStrategy() {
@@ -133,7 +158,21 @@ final class Figures {
   }
 
   boolean leakSuspected() {
-    return facts.leakSuspected().isPresent();
+    return facts.leakSuspected().isPresent() || suddenLoss();
+  }
+
+  /** Between two readings more went than the full power could have boiled, by more than two reading errors. */
+  private boolean suddenLoss() {
+    List<Entry> read = run.saw("flask-level").stream().filter(e -> e.measured().isPresent()).toList();
+    Estimate rate = numbers.get("boil-up-rate");
+    Optional<Double> volume = roles.one(Role.FLASK).flatMap(p -> p.si("volume"));
+    if (read.size() < 2 || !rate.known() || volume.isEmpty()) {
+      return false;
+    }
+    Entry a = read.get(read.size() - 2);
+    Entry b = read.get(read.size() - 1);
+    double most = rate.high() * 1e-6 * Duration.between(a.at(), b.at()).toMillis() / 60_000.0;
+    return a.measured().get().si() - b.measured().get().si() > most + SUDDEN_SHARE * volume.get();
   }
 
   boolean targetReached() {

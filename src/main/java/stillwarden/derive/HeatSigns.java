@@ -125,6 +125,8 @@ final class HeatSigns {
     boolean heat = t.cut().isEmpty() || backUnisolated();
     if (none && before && heat) {
       out.seen("boil-quenched", "", "yes", scene.told(last.get()) + ", boiling before", last.get().at(), "boiling");
+    } else if (heat && before && scene.run().age(last.get()).compareTo(Shelves.of(scene.policy(), "boiling")) > 0) {
+      out.possible("boil-quenched", scene.told(last.get()) + ", past its time", "boiling");
     } else {
       out.seen("boil-quenched", "no", "boiling has not stopped under heat");
     }
@@ -136,10 +138,13 @@ final class HeatSigns {
     boolean dead = scene.run().lastSaw("heater-power").filter(e -> e.measured().filter(q -> q.si() == 0).isPresent()).isPresent()
         && scene.run().didSince(scene.time().heatOn().orElse(Instant.MIN), "cut-power", "isolate-remote", "isolate-auto");
     out.seen("heater-proven-dead", "", dead ? "yes" : "no", dead ? "isolated and its power read as zero" : "nobody has proven the heater dead", null, "heater-power");
-    boolean stated = scene.word(Role.HEATER, "liquid-inside").filter(w -> !w.equals("no")).isPresent();
+    boolean bath = scene.roles().one(Role.HEATER).filter(h -> h.kind().endsWith("-bath")).isPresent();
+    boolean stated = !bath && scene.word(Role.HEATER, "liquid-inside").filter(w -> !w.equals("no")).isPresent();
     boolean wet = seen.isPresent() || stated;
     if (wet && !dead) {
       out.seen("heater-live-wet", "", "yes", seen.map(scene::told).orElse("liquid in the heater, by the rig file"), seen.map(Entry::at).orElse(null), "heater-wet");
+    } else if (!bath && seen.isEmpty() && !scene.time().live() && scene.key(Role.HEATER, "liquid-inside").isEmpty() && !scene.roles().absent().contains(Role.HEATER)) {
+      out.possible("heater-live-wet", "nobody has looked into the heater", scene.name(Role.HEATER) + ".liquid-inside");
     } else {
       out.seen("heater-live-wet", "", "no", wet ? "the heater is wet and proven dead" : "nobody has seen the heater wet", null, "heater-wet");
     }

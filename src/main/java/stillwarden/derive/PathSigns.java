@@ -119,8 +119,10 @@ final class PathSigns {
   /** Slowing: under half of the fastest rate of the last ten minutes. */
   private String rateWord(Entry e) {
     double now = e.measured().map(q -> q.si()).orElse(0.0);
+    double expected = scene.number("drip-rate").map(x -> x.low() / 60).orElse(0.0);
     double fastest = scene.run().saw("drip-rate").stream().filter(x -> !x.at().isBefore(e.at().minus(Duration.ofMinutes(10))))
         .flatMap(x -> x.measured().stream()).mapToDouble(q -> q.si()).max().orElse(now);
+    fastest = Math.max(fastest, expected);
     return now <= 0 ? "none" : now < fastest / 2 ? "slowing" : "drops";
   }
 
@@ -143,11 +145,7 @@ final class PathSigns {
     boolean flows = FLOWS.contains(flow.value());
     boolean overdue = pathLook.age() == Looks.Age.OVERDUE;
     if (flows || !overdue && !flow.value().equals("none") && !flow.value().equals("slowing")) {
-      if (overdue) {
-        out.counted("path", "not-proven", old + ", too old; something still comes over: counts as not proven", "path");
-      } else {
-        out.possible("path", "", List.of("open", "not-proven"), old + ", past its time", List.of("path"));
-      }
+      out.counted("path", "not-proven", old + ", past its time; " + (flows ? "something still comes over" : "no sign against it") + ": counts as not proven", "path");
     } else if (!scene.live() && !scene.time().uncleared()) {
       out.possible("path", old, "path");
     } else {
@@ -165,8 +163,10 @@ final class PathSigns {
 
   /** A fresh look from end to end outranks what the rig file said about a stopper, never a plug seen in the condenser since. */
   private boolean plugless() {
-    return Stream.of("condenser-solids", "foam", "plant-in-head").flatMap(id -> scene.run().lastSaw(id).stream())
-        .noneMatch(e -> Set.of("blocking", "at-head", "over", "yes").contains(e.text()) && !e.at().isBefore(pathLook.entry().get().at().minusSeconds(60)));
+    Instant since = pathLook.entry().get().at().minusSeconds(60);
+    boolean covered = vented() && scene.run().lastSaw("receiver-level").filter(e -> !e.at().isBefore(since)).isPresent();
+    return !covered && Stream.of("condenser-solids", "foam", "plant-in-head").flatMap(id -> scene.run().lastSaw(id).stream())
+        .noneMatch(e -> Set.of("blocking", "at-head", "over", "yes").contains(e.text()) && !e.at().isBefore(since));
   }
 
   private Instant closedSince() {
@@ -213,8 +213,8 @@ final class PathSigns {
   }
 
   private void pressure() {
-    Stream<Entry> signs = Stream.of("hiss", "joint-creeping", "reservoir-backflow", "stopper-drawn-in").flatMap(id -> scene.run().lastSaw(id).stream())
-        .filter(e -> !Set.of("no", "none", "bubbles", Looks.NOT_SURE).contains(e.text()) && !e.id().equals("stopper-drawn-in"));
+    Stream<Entry> signs = Stream.of("hiss", "joint-creeping").flatMap(id -> scene.run().lastSaw(id).stream())
+        .filter(e -> !Set.of("no", Looks.NOT_SURE).contains(e.text()));
     Stream<Entry> gauge = scene.run().lastSaw("pressure").filter(e -> e.measured().filter(q -> q.si() > 200).isPresent()).stream();
     Optional<Entry> found = Stream.concat(signs, gauge).max(java.util.Comparator.comparing(Entry::at));
     if (found.isPresent()) {
@@ -247,7 +247,11 @@ final class PathSigns {
     boolean relief = !pathOpen && (backflow || graph.relief() == PathFinding.Relief.FREE || graph.relief() == PathFinding.Relief.THROUGH_LIQUID);
     out.seenIf(relief, "reservoir-is-relief", relief ? "the reservoir may be the last way out" : "the reservoir is not needed as a way out");
     out.seen("inlet-upstream", graph.inletUpstreamOfTip() ? "yes" : "no", graph.inletUpstreamOfTip() ? "air gets in upstream of the tip" : "no opening upstream of the tip");
-    graph.feedArm().ifPresent(arm -> out.seen("feed-arm", arm, "the reservoir sits on the " + arm + " arm"));
+    if (graph.feedArm().isPresent()) {
+      out.seen("feed-arm", graph.feedArm().get(), "the reservoir sits on the " + graph.feedArm().get() + " arm");
+    } else if (!scene.roles().absent().contains(Role.RESERVOIR) && !scene.roles().absent().contains(Role.CLAISEN)) {
+      out.possible("feed-arm", "no joint says which arm carries the reservoir", "joints");
+    }
   }
 
   Looks.Look pathLook() {

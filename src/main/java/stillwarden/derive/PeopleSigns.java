@@ -51,7 +51,11 @@ final class PeopleSigns {
 
   /** Nobody but the one who left. */
   private boolean alone() {
-    return scene.rig().si("people.people-at-rig").filter(n -> n > 1).isEmpty();
+    double there = scene.rig().si("people.people-at-rig").orElse(1.0);
+    for (Entry e : scene.run().saw("person")) {
+      there += e.text().equals("arrived") ? 1 : e.text().equals("left") ? -1 : 0;
+    }
+    return there <= 0;
   }
 
   private void arrival() {
@@ -67,8 +71,9 @@ final class PeopleSigns {
   private void handover() {
     Optional<Entry> change = scene.run().lastSaw("person").filter(e -> Set.of("left", "arrived").contains(e.text()));
     Optional<Entry> done = scene.run().lastDid("handover");
+    boolean late = change.isPresent() && scene.run().age(change.get()).compareTo(Duration.ofMinutes(15)) > 0;
     boolean near = change.isPresent() && done.filter(d -> Duration.between(d.at(), change.get().at()).abs().compareTo(Duration.ofMinutes(15)) <= 0).isPresent();
-    if (scene.live() && change.isPresent() && !near) {
+    if (scene.live() && late && !near) {
       out.seen("handover", "", "missing", scene.told(change.get()) + ", no handover logged", change.get().at(), "person");
     } else {
       out.seen("handover", "done", "no change of people without a handover");

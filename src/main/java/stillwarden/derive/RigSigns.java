@@ -85,7 +85,10 @@ final class RigSigns {
     String about = role.word() + "." + key.path();
     String look = p.name() + "." + key.path();
     Datum d = p.keys().get(key.path());
-    if (d != null) {
+    Optional<stillwarden.describe.Entry> flows = scene.run().lastSaw("coolant-running").filter(e -> e.text().equals("yes"));
+    if (about.equals("condenser.coolant.flow-proven") && flows.isPresent()) {
+      out.seen(about, p.name(), "yes", scene.told(flows.get()), null, look);
+    } else if (d != null) {
       value(about, p.name(), d.text(), look, scene.stated(d), key.values());
     } else {
       out.possible(about, p.name(), key.values(), look + " is not stated", List.of(look));

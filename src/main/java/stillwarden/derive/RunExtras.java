@@ -39,6 +39,14 @@ final class RunExtras {
     jointLeaks();
     exposed();
     injuryReach();
+    stirrer();
+  }
+
+  /** A stirrer that is the boiling aid and that nobody has looked at may stand still. */
+  private void stirrer() {
+    if (scene.is(Role.FLASK, "boiling-aid", "stirrer") && scene.run().saw("stirrer").isEmpty() && scene.live()) {
+      out.possible("stirrer", "", List.of("turning", "stopped"), "nobody has looked at the stirrer", List.of("stirrer"));
+    }
   }
 
   private boolean active(String about, String... values) {
@@ -50,6 +58,10 @@ final class RunExtras {
     for (Entry e : scene.run().entries()) {
       boolean tells = Set.of("crack", "leak-under").contains(e.id()) || e.id().equals("noise") && e.text().equals("ping");
       if (tells) {
+        if (e.id().equals("crack")) {
+          // whoever looks for the crack answers the ping
+          last.values().removeIf(x -> x.id().equals("noise"));
+        }
         last.put(e.part(), e);
       }
     }
@@ -63,8 +75,8 @@ final class RunExtras {
   }
 
   private void sealed(String about, String deed) {
-    boolean hot = active("glass-hot", "yes");
     for (Entry e : scene.run().did(deed)) {
+      boolean hot = hotAt(e);
       boolean ofReceiver = deed.equals("take-apart") && scene.roles().of(e.part()).filter(r -> r == Role.RECEIVER).isPresent();
       boolean opened = deed.equals("seal") && scene.run().didSince(e.at(), "open-vent", "take-apart", "take-apart-cold");
       boolean since = scene.time().heatOn().filter(on -> !e.at().isBefore(on)).isPresent();
@@ -74,11 +86,22 @@ final class RunExtras {
     }
   }
 
+  /** A reading of the flask before the deed outranks the clock. */
+  private boolean hotAt(Entry deed) {
+    Optional<Entry> read = Stream.of("flask-temperature", "flask-wall-temperature").flatMap(id -> scene.run().saw(id).stream())
+        .filter(e -> e.measured().isPresent() && !e.at().isAfter(deed.at())).max(Comparator.comparing(Entry::at));
+    return read.map(e -> e.measured().get().si() > scene.limit("hand-warm-max")).orElse(active("glass-hot", "yes"));
+  }
+
   /** Needs a look at the tip: boiling seen, and no drop for the look time since the last one that had one. */
   private void dripOverdue() {
     boolean boiling = active("boiling", "gentle", "steady", "violent");
     Optional<Entry> drip = scene.run().lastSaw("drip");
     boolean dry = drip.filter(e -> e.text().equals("none")).isPresent();
+    if (boiling && drip.filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent()) {
+      out.possible("drip-overdue", scene.told(drip.get()), "drip");
+      return;
+    }
     if (!boiling || !dry || scene.time().cut().isPresent()) {
       out.seen("drip-overdue", "no", boiling ? "something comes over, or nobody has looked" : "boiling is not seen");
       return;
@@ -147,7 +170,9 @@ final class RunExtras {
 
   private void overLimit(String about, String id, double kelvin) {
     Optional<Entry> t = scene.run().lastSaw(id).filter(e -> e.measured().isPresent());
-    if (t.isPresent()) {
+    if (scene.run().lastSaw(id).filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent()) {
+      out.possible(about, scene.told(scene.run().lastSaw(id).get()), id);
+    } else if (t.isPresent()) {
       boolean rise = id.equals("coolant-outlet-temperature") && scene.run().lastSaw("coolant-supply-temperature").flatMap(Entry::measured)
           .or(() -> scene.key(Role.CONDENSER, "coolant.supply").flatMap(d -> d.measured()))
           .filter(in -> t.get().measured().get().si() - in.si() > scene.limit("coolant-rise-max")).isPresent();
@@ -181,6 +206,10 @@ final class RunExtras {
 
   private void laterOf(String about, String seen, Map<String, String> deeds) {
     Optional<Entry> look = scene.run().lastSaw(seen).filter(e -> !e.text().equals(Looks.NOT_SURE));
+    if (scene.run().lastSaw(seen).filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent()) {
+      out.possible(about, scene.told(scene.run().lastSaw(seen).get()), seen);
+      return;
+    }
     Optional<Entry> deed = scene.run().lastDid(deeds.keySet().toArray(String[]::new));
     Optional<Entry> last = Stream.of(look, deed).flatMap(Optional::stream).max(Comparator.comparing(Entry::at).thenComparing(Entry::line));
     if (last.isPresent()) {

@@ -126,6 +126,14 @@ final class SetupSigns {
     Optional<String> own = p.word("residual-current-protected");
     Optional<String> word = own.filter("yes"::equals).or(() -> feeder.flatMap(f -> f.word("residual-current-protected"))).or(() -> own);
     String look = feeder.map(Part::name).orElse(p.name()) + ".residual-current-protected";
+    if (scene.says("place.outlets-near-water", "no")) {
+      out.seen("residual-current-protected", p.name(), "yes", "no outlet near water, by the rig file", null, look);
+      return;
+    }
+    if (word.filter("no"::equals).isPresent() && !scene.says("place.outlets-near-water", "yes")) {
+      out.possible("residual-current-protected", p.name(), List.of("no"), p.name() + " is not protected, and nobody said whether water is near", List.of("place.outlets-near-water"));
+      return;
+    }
     if (word.isPresent()) {
       out.seen("residual-current-protected", p.name(), word.get(), p.name() + " residual current protected " + word.get() + ", by the rig file", null, look);
     } else {

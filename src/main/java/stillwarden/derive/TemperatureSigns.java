@@ -76,7 +76,28 @@ final class TemperatureSigns {
         return;
       }
     }
-    out.seen("readings-disagree", "no", "no two readings of one thing disagree");
+    if (!levelsDisagree()) {
+      out.seen("readings-disagree", "no", "no two readings of one thing disagree");
+    }
+  }
+
+  /** Two sources of one level within two minutes, two words apart or more. */
+  private boolean levelsDisagree() {
+    for (String id : List.of("flask-level", "reservoir-level", "receiver-level")) {
+      List<Entry> all = scene.run().saw(id);
+      List<String> words = stillwarden.describe.Vocabulary.get().observation(id).orElseThrow().key().values();
+      for (int i = all.size() - 1; i > 0; i--) {
+        Entry a = all.get(i);
+        Entry b = all.get(i - 1);
+        boolean together = Duration.between(b.at(), a.at()).compareTo(FALL_WITHIN) <= 0 && scene.run().age(a).compareTo(FALL_WITHIN.multipliedBy(2)) <= 0;
+        boolean words2 = words.contains(a.text()) && words.contains(b.text());
+        if (together && !a.who().equals(b.who()) && words2 && Math.abs(words.indexOf(a.text()) - words.indexOf(b.text())) >= 2) {
+          out.seen("readings-disagree", "", "yes", scene.told(b) + " against " + scene.told(a), a.at(), id);
+          return true;
+        }
+      }
+    }
+    return false;
   }
 
   private void warmUp() {

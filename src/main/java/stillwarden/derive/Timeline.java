@@ -37,6 +37,7 @@ public record Timeline(
   private static final Set<String> DRIPS = Set.of("drops", "stream", "slugs");
   private static final Set<String> BOILS = Set.of("gentle", "steady", "violent");
   private static final double WARM_KELVIN = 318.15;
+  private static final double HAND_WARM_KELVIN = 323.15;
 
   /**
    * @param heatUpLow low end of the computed heat-up time, or null when it cannot be had
@@ -136,13 +137,19 @@ public record Timeline(
       return "stopping";
     }
     boolean cool = run.didSince(cut.get(), "start-work-up") || cool(run, boilEnd.get())
-        || !boilEnd.get().plus(cooling).isAfter(run.at());
+        || !readHot(run, boilEnd.get()) && !boilEnd.get().plus(cooling).isAfter(run.at());
     return cool ? "work-up" : "cooling";
   }
 
   private static boolean cool(RunState run, Instant from) {
     return first(run, from, e -> flask(e) && (e.id().equals("part-feels") && !e.text().equals("hot")
-        || e.measured().filter(q -> q.si() <= 323.15).isPresent())).isPresent();
+        || e.measured().filter(q -> q.si() <= HAND_WARM_KELVIN).isPresent())).isPresent();
+  }
+
+  /** The last reading of the flask says hot: it outranks the computed time. */
+  private static boolean readHot(RunState run, Instant from) {
+    return run.entries().stream().filter(e -> !e.at().isBefore(from) && flask(e)).reduce((a, b) -> b)
+        .filter(e -> e.text().equals("hot") || e.measured().filter(q -> q.si() > HAND_WARM_KELVIN).isPresent()).isPresent();
   }
 
   private static boolean flask(Entry e) {

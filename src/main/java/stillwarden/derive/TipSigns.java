@@ -97,7 +97,10 @@ final class TipSigns {
     Optional<Entry> level = scene.run().lastSaw("receiver-level");
     boolean covered = level.isPresent() && (ventAt.isPresent() && level.get().measured().filter(q -> q.si() >= ventAt.get()).isPresent()
         || level.get().text().equals("full"));
-    if (tight && covered) {
+    boolean unsure = tight && level.filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent();
+    if (unsure) {
+      out.possible("receiver-closes-vent", scene.told(level.get()), "receiver-level");
+    } else if (tight && covered) {
       out.seen("receiver-closes-vent", "", "yes", scene.told(level.get()) + ", gas-tight receiver", level.get().at(), "receiver-level");
     } else {
       out.seen("receiver-closes-vent", "no", tight ? "the receiver's own vent is not covered" : "the receiver is not gas-tight");

@@ -35,7 +35,7 @@ final class WaterSigns {
     Optional<String> word = l.entry().flatMap(e -> levelWord(Role.FLASK, e));
     if (bare.isPresent() && l.entry().filter(e -> e.at().isAfter(bare.get().at())).isEmpty()) {
       out.seen("flask-level", "", "dry", scene.told(bare.get()), bare.get().at(), "flask-level");
-    } else if (word.isPresent() && (l.fresh() || Set.of("low", "nearly-dry", "dry").contains(word.get()))) {
+    } else if (word.isPresent() && (l.fresh() || Set.of("low", "nearly-dry", "dry").contains(word.get()) && !(l.age() == Looks.Age.OVERDUE && !longAway()))) {
       out.seen("flask-level", "", word.get(), scene.told(l.entry().get()), since("flask-level", Role.FLASK, word.get()), "flask-level");
     } else if (l.fresh() && l.entry().isEmpty()) {
       out.seen("flask-level", "", "ok", "water as charged, by the rig file, and not boiling long", null, "flask-level");
@@ -197,13 +197,17 @@ final class WaterSigns {
   }
 
   private void feed() {
-    Optional<Entry> seen = scene.run().lastSaw("feed");
+    Optional<Entry> seen = scene.run().lastSaw("feed").filter(e -> !e.text().equals(Looks.NOT_SURE));
+    if (scene.run().lastSaw("feed").filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent()) {
+      out.possible("feeding", scene.told(scene.run().lastSaw("feed").get()), "feed");
+    }
     boolean running = seen.filter(e -> e.text().equals("drops") || e.text().equals("stream")).isPresent();
     out.seen("feeding", "", running ? seen.get().text() : "no", seen.map(scene::told).orElse("no feed seen"), null, "feed");
     Optional<Entry> fed = scene.run().lastDid("feed");
     boolean lately = fed.isPresent() && fed.get().measured().isPresent();
     Duration recovery = lately ? scene.numbers().reboilTime(fed.get().measured().get().si()).orElse(Duration.ofMinutes(2)) : Duration.ZERO;
-    boolean within = lately && scene.run().age(fed.get()).compareTo(recovery) <= 0;
+    Duration explained = recovery.multipliedBy(2).compareTo(Duration.ofMinutes(2)) > 0 ? recovery.multipliedBy(2) : Duration.ofMinutes(2);
+    boolean within = lately && scene.run().age(fed.get()).compareTo(explained) <= 0;
     boolean slug = lately && fed.get().measured().get().si() >= scene.limit("feed-slug-min");
     boolean now = lately && scene.run().age(fed.get()).compareTo(Duration.ofMinutes(2).plus(recovery)) <= 0;
     if (slug && now || seen.filter(e -> e.text().equals("stream")).isPresent()) {

@@ -13,7 +13,8 @@ import java.util.Optional;
  * @param verb {@code saw} or {@code did}
  * @param id the observation or the deed
  * @param part the part named, or empty
- * @param text the value's word ({@code yes} when none was written; {@code not-sure} is unknown), or the quantity as written
+ * @param text the value's word ({@code yes} when none was written; {@code not-sure} is unknown), or the quantity as
+ *     written; for a spill the word of {@code what}, where it says what was spilt
  * @param reach for injuries: is the switch in reach; empty when not said
  */
 public record Entry(

@@ -27,6 +27,10 @@ final class Fields {
   /** Between braces a comma ends the value: what follows it looks like a key of its own without a value. */
   private static void comma(Node.Field before, Node key, Defects defects) {
     String whole = before.value().text() + ", " + key.text();
+    if (before.value().text().matches("[+-]?[0-9]+") && key.text().matches("[0-9].*")) {
+      defects.add(key.spot(), "a comma in a number; write a point: " + Words.quote(before.value().text() + "." + key.text()));
+      return;
+    }
     defects.add(key.spot(), Words.quote(key.text()) + " has no value; between braces a comma ends a value: if it belongs to "
         + Words.quote(before.key()) + ", put the whole value in quotes, \"" + Words.quote(whole).replace("`", "") + "\"");
   }

@@ -2,6 +2,9 @@ package stillwarden.describe;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import tools.jackson.core.JacksonException;
 import tools.jackson.core.JsonParser;
 import tools.jackson.core.JsonToken;
@@ -16,6 +19,9 @@ final class JsonSource {
   private static final JsonFactory FACTORY = JsonFactory.builder()
       .streamReadConstraints(StreamReadConstraints.builder().maxNestingDepth(64).maxStringLength(64 * 1024).maxNumberLength(100).build())
       .build();
+
+  private static final Pattern CHARACTER = Pattern.compile("^Unexpected character \\('(.)'");
+  private static final Pattern TOKEN = Pattern.compile("^(?:Unrecognized|Non-standard) token '([^']*)'");
 
   private final String file;
   private final int firstLine;
@@ -46,9 +52,21 @@ final class JsonSource {
     }
   }
 
+  /** The parser's message in our words where it is one of the usual ones; always lower case and on one line. */
   private static String wording(JacksonException e) {
-    String m = e.getOriginalMessage().replaceAll("\\s+", " ").replaceAll("\\(.*", "").strip();
-    return m.contains("end-of-input") ? "it ends too early" : Words.quote(m).replace("`", "").toLowerCase(java.util.Locale.ROOT);
+    String said = e.getOriginalMessage().replaceAll("\\s+", " ");
+    Matcher character = CHARACTER.matcher(said);
+    Matcher token = TOKEN.matcher(said);
+    if (said.contains("end-of-input")) {
+      return "it ends too early";
+    }
+    if (character.find()) {
+      return Words.quote(character.group(1)) + " can't stand here" + (said.contains("double-quote") ? "; keys stand in double quotes" : "");
+    }
+    if (token.find()) {
+      return Words.quote(token.group(1)) + " is no JSON value; words stand in double quotes";
+    }
+    return Words.quote(said.replaceAll("\\(.*", "").strip()).replace("`", "").toLowerCase(Locale.ROOT);
   }
 
   private Node document() throws Unusable {

@@ -27,7 +27,7 @@ final class KeySchema {
       case TIME -> pattern("^" + TIME + "$");
       case DATE -> pattern("^" + DATE + "$");
       case UNTIL -> pattern("^(" + DATE + "|" + TIME + ")$");
-      case SIZE -> pattern("^[1-9][0-9]?/[1-9][0-9]?$");
+      case SIZE -> pattern("^(ball )?[1-9][0-9]?(\\.[0-9])?/[1-9][0-9]?( in (ball )?[1-9][0-9]?(\\.[0-9])?/[1-9][0-9]?)?$");
       case SHARES -> shares(key);
     });
     if (!key.means().isEmpty()) {

@@ -121,6 +121,9 @@ final class LogLine {
       defects.add(n.get("what").orElseThrow().spot(), o.what().isEmpty() ? "`what` does not belong to " + Words.quote(o.id())
           : Words.quote(said.get()) + " for `what`: one of " + Words.list(o.what()) + " is wanted" + Words.hint(said.get(), o.what()));
     }
+    if (said.isPresent() && n.get("value").filter(v -> v.text().equals("no") || v.is(Node.Kind.FALSE)).isPresent()) {
+      defects.add(n.spot(), "`what` was spilt and `value` says that nothing was");
+    }
     return said;
   }
 

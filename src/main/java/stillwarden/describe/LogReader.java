@@ -111,7 +111,11 @@ public final class LogReader {
    */
   public Optional<Entry> add(String line) throws Unusable {
     number++;
-    return take(line, true);
+    if (line.length() > MOST_BYTES_A_LINE) {
+      leaveOut("the line is longer than 64 KiB", "", false);
+      return Optional.empty();
+    }
+    return take(number == 1 && line.startsWith("\uFEFF") ? line.substring(1) : line, true);
   }
 
   /** What has been read so far. */

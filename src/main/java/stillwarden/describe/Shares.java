@@ -3,6 +3,8 @@ package stillwarden.describe;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
 
 /** A map of names to shares of one whole, such as the makeup of an oil. */
 record Shares(Key key, String path, Defects defects) {
@@ -31,12 +33,14 @@ record Shares(Key key, String path, Defects defects) {
       return;
     }
     try {
-      out.put(f.key(), Values.read(SHARE, path + "." + f.key(), f.value()));
+      out.put(f.key(), Values.read(share(f.key()), path + "." + f.key(), f.value()));
     } catch (BadValue e) {
-      defects.add(f.value().spot(), Words.quote(f.key()) + ": " + e.getMessage());
+      defects.add(f.value().spot(), e.getMessage());
     }
   }
 
-  private static final Key SHARE = new Key("share", Key.Type.QUANTITY, List.of(), java.util.Optional.of(Dimension.FRACTION), List.of("%"),
-      java.util.OptionalDouble.of(0), java.util.OptionalDouble.of(1), false, "", "share of the whole");
+  private static Key share(String name) {
+    return new Key(name, Key.Type.QUANTITY, List.of(), Optional.of(Dimension.FRACTION), List.of("%"), OptionalDouble.of(0), OptionalDouble.of(1), false, "",
+        "share of the whole");
+  }
 }

@@ -13,7 +13,7 @@ final class Values {
   private static final Pattern RFC_3339 =
       Pattern.compile("\\d{4}-\\d{2}-\\d{2}T\\d{2}:\\d{2}:\\d{2}(\\.\\d{1,9})?(Z|[+-]\\d{2}:\\d{2})");
   private static final Pattern WHOLE = Pattern.compile("0|-?[1-9][0-9]{0,8}");
-  private static final Pattern SIZE = Pattern.compile("[1-9][0-9]?/[1-9][0-9]?");
+  private static final Pattern SIZE = Pattern.compile("(ball )?[1-9][0-9]?(\\.[0-9])?/[1-9][0-9]?( in (ball )?[1-9][0-9]?(\\.[0-9])?/[1-9][0-9]?)?");
 
   private Values() {}
 
@@ -110,7 +110,7 @@ final class Values {
     if (n.isText() && SIZE.matcher(n.text()).matches()) {
       return n.text();
     }
-    throw new BadValue(Words.quote(n.text()) + " is no joint size; diameter and length in mm are wanted, for example `24/40`");
+    throw new BadValue(Words.quote(n.text()) + " is no joint size; diameter and length in mm are wanted, for example `24/40`, or `24/29 in 24/40` where the two sides differ");
   }
 
   /** RFC 3339 with an offset: a clock time without one could be any hour of the day. */

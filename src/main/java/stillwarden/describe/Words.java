@@ -1,7 +1,7 @@
 package stillwarden.describe;
 
 import java.util.Collection;
-import java.util.Comparator;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 
@@ -33,12 +33,29 @@ final class Words {
     return nearest(word, known).map(n -> "; nearest is `" + n + "`").orElse("");
   }
 
+  /** The one known word that has it as a part ({@code liebig}), else the one with the fewest edits, else none. */
   static Optional<String> nearest(String word, Collection<String> known) {
     String w = word.substring(0, Math.min(word.length(), LONGEST)).toLowerCase(Locale.ROOT).replace('_', '-').replace(' ', '-');
     int most = Math.max(2, w.length() / 3);
-    return known.stream()
-        .filter(k -> distance(w, k.toLowerCase(Locale.ROOT)) <= most)
-        .min(Comparator.comparing((String k) -> distance(w, k.toLowerCase(Locale.ROOT))).thenComparing(k -> k));
+    List<String> longer = known.stream().filter(k -> w.length() > 2 && List.of(k.split("[-./]")).contains(w)).toList();
+    List<String> near = longer.isEmpty() ? nearest(w, known, 2 * most) : longer;
+    return near.size() == 1 ? Optional.of(near.get(0)) : Optional.empty();
+  }
+
+  /** All that are nearest: of two equally near words neither is suggested, for one could be the calm one and wrong. */
+  private static List<String> nearest(String w, Collection<String> known, int most) {
+    int best = known.stream().mapToInt(k -> score(w, k)).min().orElse(Integer.MAX_VALUE);
+    return best > most ? List.of() : known.stream().filter(k -> score(w, k) == best).distinct().toList();
+  }
+
+  /** Twice the edits to the whole word, or one more than twice those to a long member of it: {@code anethol} is anethole, not menthol. */
+  private static int score(String w, String known) {
+    String k = known.toLowerCase(Locale.ROOT);
+    int best = 2 * distance(w, k);
+    for (String member : k.split("-")) {
+      best = member.length() > 4 && !member.equals(k) && distance(w, member) < 2 ? Math.min(best, 2 * distance(w, member) + 1) : best;
+    }
+    return best;
   }
 
   /** Edits between two words, a swap of neighbours counting as one. */

@@ -83,6 +83,12 @@ public record Finding(
     return new Finding(rule, hazard, standing.weaker(other.standing()), List.copyOf(all), statements, root, other.signal(), other.urgency());
   }
 
+  /** Only its plain bans: a set-up hazard mended cold still forbids. */
+  public Finding bansOnly() {
+    List<Statement> bans = statements.stream().filter(s -> s instanceof Statement.Forbid).toList();
+    return new Finding(rule, hazard, standing, facts, bans, under, signal, urgency);
+  }
+
   private Finding with(Statement s) {
     List<Statement> more = new ArrayList<>(statements);
     more.add(s);

@@ -33,6 +33,15 @@ public final class Advisor {
     return advise(rig, policy, log, at, Judge.forRuns(), true);
   }
 
+  /** The same without a cap on steps, bans and questions: for those who check, not for those who act. */
+  public static Advice whole(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at) {
+    OffsetDateTime when = at.orElseGet(() -> latest(log));
+    Situation s = situation(rig, policy, log, when);
+    try (Judge judge = Judge.forRuns()) {
+      return new Answer(s, judge.judge(SetupFaults.with(s, judge.judge(s.signs()))), Optional.of(when), true).advice(log.leftOut());
+    }
+  }
+
   /** With a judge that is kept for a live run: only the signs that came or went are handed to the engine. */
   public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at, Judge judge, boolean closeJudge) {
     OffsetDateTime when = at.orElseGet(() -> latest(log));

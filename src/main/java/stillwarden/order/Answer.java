@@ -65,7 +65,7 @@ final class Answer {
 
   Advice advice(List<RunLog.LeftOut> leftOut) {
     boolean setup = situation.time().stage().equals("setting-up");
-    List<Finding> acted = findings.stream().filter(f -> f.isActive() && (setup || !Verdicts.gate(f))).toList();
+    List<Finding> acted = findings.stream().filter(Finding::isActive).map(f -> setup || !Verdicts.gate(f) ? f : f.bansOnly()).toList();
     Arrange arrange = new Arrange(s -> deadlines.secondsToHarm(s.reasons), s -> Walk.station(situation, s.part));
     Arrange.Plan plan = arrange.arrange(acted);
     List<Step> steps = new ArrayList<>(plan.steps());
@@ -201,7 +201,7 @@ final class Answer {
   private List<Advice.Ban> bans(List<Arrange.Bar> bars) {
     List<Advice.Ban> out = new ArrayList<>();
     for (Arrange.Bar b : bars) {
-      if (out.size() < MOST_BANS && b.named()) {
+      if ((everything || out.size() < MOST_BANS) && b.named()) {
         Set<String> why = new TreeSet<>();
         b.reasons().forEach(f -> why.add(f.rule()));
         out.add(new Advice.Ban(b.deed(), Wording.english().not(b.deed()), b.until(), List.copyOf(why)));
@@ -219,7 +219,7 @@ final class Answer {
       }
     });
     Set<String> unknown = new TreeSet<>();
-    findings.stream().filter(f -> !f.isActive() && Verdicts.gate(f) && Hazards.signal(f) != Signal.NOTICE)
+    findings.stream().filter(f -> !f.isActive() && Verdicts.holdsStart(f))
         .forEach(f -> f.facts().stream().filter(x -> x.standing() == Standing.POSSIBLE).forEach(x -> unknown.add(x.about() + " " + x.part())));
     if (unknownOnly) {
       return unknown;

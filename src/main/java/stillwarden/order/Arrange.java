@@ -57,10 +57,8 @@ final class Arrange {
   }
 
   private static Map<String, Bar> bars(List<Finding> active) {
-    List<Finding> graveFirst = new ArrayList<>(active);
-    graveFirst.sort(Comparator.comparing(Hazards::signal).reversed());
     Map<String, Bar> out = new LinkedHashMap<>();
-    for (Finding f : graveFirst) {
+    for (Finding f : active) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Forbid ban) {
           Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until(), ban.deed().equals(deed), List.of(f)), Bar::with));

@@ -19,11 +19,16 @@ final class Verdicts {
   }
 
   private static String beforeHeat(List<Finding> findings, boolean notJudged) {
-    boolean holds = findings.stream().anyMatch(f -> Hazards.signal(f) != Signal.NOTICE && (gate(f) || f.isActive()));
+    boolean holds = findings.stream().anyMatch(Verdicts::holdsStart);
     return holds || notJudged ? "not-yet" : "start";
   }
 
-  /** An unknown holds the start when it could hide a set-up hazard. */
+  /** Anything of CAUTION or above that is so, or that an unknown could hide. */
+  static boolean holdsStart(Finding f) {
+    return Hazards.signal(f) != Signal.NOTICE && !Hazards.of(f.hazard()).principle();
+  }
+
+  /** A set-up hazard: judged before heat, and no alarm of its own in the run. */
   static boolean gate(Finding f) {
     return Hazards.urgency(f).equals("before-start") && !Hazards.of(f.hazard()).principle();
   }

@@ -28,6 +28,11 @@ final class Figures {
     return unit.equals("1") ? six(value) : six(value) + " " + unit;
   }
 
+  /** The number's name in words. */
+  static String name(Estimate e) {
+    return e.name().replace('-', ' ').replace("co boiling", "co-boiling").replace("boil up", "boil-up").replace("heat up", "heat-up");
+  }
+
   static String six(double value) {
     return plain(value, SIX);
   }
@@ -50,7 +55,7 @@ final class Figures {
   /** The value with its band, the word with its reasons, or why there is none. */
   static String read(Estimate e) {
     if (!e.known()) {
-      return "not known: " + e.reason();
+      return "no value: " + e.reason();
     }
     if (isWord(e)) {
       return e.notes().isEmpty() ? e.method() : e.method() + ", because " + String.join("; ", e.notes());

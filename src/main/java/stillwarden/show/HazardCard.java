@@ -54,9 +54,10 @@ public record HazardCard(String id, String family, String signal, String urgency
     return entry.text("edition").filter(e -> !e.equals("-") && !ref.contains(e)).map(e -> " (" + e + ")").orElse("");
   }
 
-  /** A reference that nobody looked up for this says so. */
+  /** A reference that nobody read for this says so, in the list's own words. */
   private static String seen(Tree entry) {
-    return entry.text("seen").filter("memory"::equals).map(m -> ", from memory").orElse("");
+    String seen = entry.text("seen").orElse("");
+    return seen.startsWith("secondary") ? ", " + seen : seen.equals("memory") ? ", from memory" : "";
   }
 
   static String firstSentence(String page) {

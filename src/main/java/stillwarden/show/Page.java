@@ -11,7 +11,8 @@ final class Page {
   private final StringBuilder out = new StringBuilder();
 
   Page line(String text) {
-    out.append(text).append('\n');
+    // parts of a sentence may carry a UCUM unit; people read °C
+    out.append(text.replaceAll("(?<=\\d) Cel\\b", " °C")).append('\n');
     return this;
   }
 

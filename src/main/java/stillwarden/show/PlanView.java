@@ -23,7 +23,7 @@ public final class PlanView {
     g.put("What comes over", List.of("mole-ratio-water-to-oil", "mass-ratio-water-to-oil", "oil-share-of-distillate"));
     g.put("Water", List.of("water-needed", "water-needed-ideal", "water-available", "feed-limit"));
     g.put("Heat", List.of("heat-up-time", "boil-up-rate", "drip-rate"));
-    g.put("Times from the first drop", List.of("time-to-target", "time-to-reservoir-end", "time-to-minimum-level",
+    g.put("Times from heat on", List.of("time-to-target", "time-to-reservoir-end", "time-to-minimum-level",
         "time-to-dryness", "time-to-full-receiver"));
     g.put("Condenser and coolant", List.of("condenser-duty", "condenser-capacity", "coolant-flow-least", "coolant-outlet",
         "coolant-strategy", "coolant-temperature", "freezing-point-of-oil", "crystals-possible-from"));
@@ -45,6 +45,9 @@ public final class PlanView {
     page.section("To know", plan.lines(), line -> page.item("  - ", line));
     page.section("Assumed, defaulted or extrapolated", assumptions(plan), line -> page.item("  - ", line));
     page.section("Waivers in force", plan.waivers(), line -> page.item("  - ", line));
+    SourceList sources = new SourceList();
+    plan.numbers().forEach(e -> sources.add(e.source()));
+    sources.write(page);
     return page.line("").item("", plan.defersTo()).text();
   }
 
@@ -58,7 +61,7 @@ public final class PlanView {
 
   private static String number(Estimate e) {
     String how = e.known() && !Figures.isWord(e) && !e.method().isEmpty() ? "; " + e.method() : "";
-    return e.name().replace('-', ' ') + ": " + Figures.read(e) + how;
+    return Figures.name(e) + ": " + Figures.read(e) + how;
   }
 
   private static List<String> unlisted(PlanSheet plan, Set<String> shown) {
@@ -73,7 +76,7 @@ public final class PlanView {
     Map<String, List<String>> by = new LinkedHashMap<>();
     plan.notes().forEach(n -> by.computeIfAbsent(n, k -> new ArrayList<>()));
     for (Estimate e : plan.numbers().stream().filter(n -> !Figures.isWord(n)).toList()) {
-      e.notes().forEach(n -> by.computeIfAbsent(n, k -> new ArrayList<>()).add(e.name().replace('-', ' ')));
+      e.notes().forEach(n -> by.computeIfAbsent(n, k -> new ArrayList<>()).add(Figures.name(e)));
     }
     return by.entrySet().stream()
         .map(n -> n.getValue().isEmpty() ? n.getKey() : n.getKey() + " (" + String.join(", ", n.getValue()) + ")").toList();

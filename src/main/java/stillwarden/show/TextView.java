@@ -3,6 +3,7 @@ package stillwarden.show;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import stillwarden.derive.Estimate;
 import stillwarden.order.Advice;
 import stillwarden.order.Wording;
@@ -46,6 +47,7 @@ public final class TextView {
     page.section("Worth knowing", advice.notes(), this::bullet);
     page.section("Left out", advice.leftOut(), this::bullet);
     page.section("Waivers in force", advice.waivers(), this::bullet);
+    sources();
     page.line("").item("", advice.defersTo());
     return page.text();
   }
@@ -59,8 +61,10 @@ public final class TextView {
   }
 
   private String firstThing() {
-    if (!advice.actions().isEmpty()) {
-      return conditional(advice.actions().get(0));
+    // in set-up the verdict itself says "not yet": what comes first is the first thing that would change it
+    Optional<Advice.Action> first = advice.actions().stream().filter(a -> !a.act().equals("do-not-start")).findFirst();
+    if (first.isPresent()) {
+      return conditional(first.get());
     }
     return advice.ask().isEmpty() ? "nothing is due." : advice.ask().get(0).say();
   }
@@ -113,8 +117,15 @@ public final class TextView {
     page.item("      ", "source: " + b.source());
   }
 
+  private void sources() {
+    SourceList sources = new SourceList();
+    advice.actions().forEach(a -> a.because().forEach(b -> sources.add(b.source())));
+    advice.numbers().forEach(e -> sources.add(e.source()));
+    sources.write(page);
+  }
+
   private void number(Estimate e) {
-    page.item("  - ", e.name().replace('-', ' ') + ": " + Figures.read(e));
+    page.item("  - ", Figures.name(e) + ": " + Figures.read(e));
   }
 
   private void bullet(String text) {

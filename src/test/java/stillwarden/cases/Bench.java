@@ -30,7 +30,7 @@ final class Bench {
   static final Instant HEAT_ON = Instant.parse("2026-05-12T09:00:00Z");
   private static final int FIRST_DROP = 20;
   private static final Pattern LINE = Pattern.compile("([\\d.]+)\\s+(saw|did)\\s+(\\S+)\\s*(.*)");
-  private static final Set<String> ENDS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas", "end-run");
+  private static final Set<String> ENDS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas");
 
   private Bench() {}
 
@@ -61,6 +61,11 @@ final class Bench {
   private static void change(Map<String, Object> tree, String path, Object value) {
     if (path.equals("joints")) {
       put(tree, new String[] {"joints"}, 0, value);
+      return;
+    }
+    Matcher whole = Pattern.compile("joints\\[(\\d+)\\]").matcher(path);
+    if (whole.matches() && "absent".equals(value)) {
+      ((List<Object>) tree.get("joints")).remove(Integer.parseInt(whole.group(1)));
       return;
     }
     Matcher joint = Pattern.compile("joints\\[(\\d+)\\]\\.(.+)").matcher(path);

@@ -42,7 +42,7 @@ class CasesTest {
     if (log.isPresent()) {
       assertThat(log.get().leftOut()).as("lines left out").isEmpty();
     }
-    Advice a = log.isPresent() ? Advisor.advise(rig, policy, log.get(), Optional.empty()) : Advisor.inspect(rig, policy, Optional.empty());
+    Advice a = log.isPresent() ? Advisor.whole(rig, policy, log.get(), Optional.empty()) : Advisor.inspect(rig, policy, Optional.empty());
     Explanation why = Advisor.explain(c.hazard(), rig, policy, log, Optional.empty());
     List<String> wrong = new ArrayList<>();
     if (c.has("fires") && !outcome(why).equals(c.word("fires"))) {

@@ -63,6 +63,7 @@ class LogReaderTest {
       "'saw':'hiss','reach':'yes'                    | belongs to an injury                | hiss",
       "'saw':'hiss','what':'oil'                     | does not belong to `hiss`           | hiss",
       "'saw':'spill','what':'wine'                   | one of water, oil, other, solvent   | spill",
+      "'saw':'spill','value':'no','what':'oil'       | says that nothing was               | spill",
       "'saw':'hiss','corrects':'n1'                  | no earlier line has that id         | hiss",
       "'saw':'steam','value':'on'                    | can't be judged yet                 | steam",
       "'saw':5                                       | takes a word                        | ^^",
@@ -232,6 +233,14 @@ class LogReaderTest {
     assertThat(reader.log().entries()).hasSize(1);
     assertThat(reader.log().leftOut().get(0).line()).isEqualTo(3);
     assertThat(reader.log().header()).containsEntry("rig", "a");
+  }
+
+  @Test
+  void aGrowingLogHasTheSameNets() throws Exception {
+    LogReader reader = new LogReader("-");
+    assertThat(reader.add("\uFEFF" + OK.strip())).isPresent();
+    assertThat(reader.add("{\"x\":\"" + "y".repeat(70_000) + "\"}")).isEmpty();
+    assertThat(reader.log().leftOut().get(0).reason()).contains("longer than 64 KiB");
   }
 
   @Test

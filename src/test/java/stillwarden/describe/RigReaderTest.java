@@ -98,7 +98,7 @@ class RigReaderTest {
       "charge: { water: 1e-400 mL }                                | too small",
       "charge: { water: 250 ML }                                   | did you mean `mL`",
       "'charge: { water: \"1,5 L\" }'                              | write a point: `1.5 L`",
-      "'charge: { water: 1,5 L }'                                  | between braces a comma ends a value",
+      "'charge: { water: 1,5 L }'                                  | a comma in a number; write a point: `1.5 L`",
       "'charge: { material: fennel, crushed, water: 4 mL }'        | put the whole value in quotes",
       "charge: { water: 400 }                                      | has no unit",
       "charge: { water: \"400\" }                                  | has no unit",
@@ -265,6 +265,8 @@ class RigReaderTest {
     assertThat(refused("parts:\n  place: { kind: beaker }\n")).contains("means something else here");
     assertThat(refused("parts:\n  a.b: { kind: beaker }\n")).contains("is no name of a part");
     assertThat(refused("parts:\n  a: { kind: beeker }\n")).contains("nearest is `beaker`");
+    assertThat(refused("parts:\n  a: { kind: liebig }\n")).contains("nearest is `liebig-condenser`");
+    assertThat(refused("parts:\n  a: { kind: round-bottom-flask, boiling-aid: stones }\n")).as("two words have it: neither is suggested").doesNotContain("nearest");
     assertThat(refused("parts:\n  a: { volume: 1 L }\n")).contains("needs a `kind`");
     assertThat(refused("parts:\n  a: beaker\n")).contains("needs a `kind`");
     assertThat(refused("parts:\n  a: { kind: oil-trap }\n")).contains("can't be judged yet");

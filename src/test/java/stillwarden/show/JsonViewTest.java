@@ -6,6 +6,7 @@ import com.networknt.schema.InputFormat;
 import com.networknt.schema.Schema;
 import com.networknt.schema.SchemaRegistry;
 import com.networknt.schema.SpecificationVersion;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -13,8 +14,15 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 import stillwarden.describe.Defect;
+import stillwarden.describe.LogReader;
+import stillwarden.describe.Policy;
+import stillwarden.describe.Rig;
+import stillwarden.describe.RigReader;
+import stillwarden.describe.RunLog;
 import stillwarden.describe.Spot;
+import stillwarden.describe.Unusable;
 import stillwarden.order.Advice;
+import stillwarden.order.Advisor;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.json.JsonMapper;
 
@@ -32,6 +40,18 @@ class JsonViewTest {
   void everyAnswerIsValidAgainstThePrintedSchema(Advice advice) {
     assertThat(SCHEMA.validate(JsonView.of(advice), InputFormat.JSON)).isEmpty();
     assertThat(SCHEMA.validate(JsonView.line(advice), InputFormat.JSON)).isEmpty();
+  }
+
+  @Test
+  void realAnswersAreValidToo() throws Unusable {
+    Rig rig = RigReader.read(Path.of("src/test/resources/describe/bench4.rig.yaml"));
+    RunLog log = LogReader.read(Path.of("src/test/resources/describe/bench4.run.jsonl"));
+    Advice inspected = Advisor.inspect(rig, Policy.NONE, Optional.empty());
+    Advice advised = Advisor.advise(rig, Policy.NONE, log, Optional.empty());
+    assertThat(inspected.actions()).isNotEmpty();
+    assertThat(advised.actions()).isNotEmpty();
+    assertThat(SCHEMA.validate(JsonView.of(inspected), InputFormat.JSON)).isEmpty();
+    assertThat(SCHEMA.validate(JsonView.of(advised), InputFormat.JSON)).isEmpty();
   }
 
   @Test

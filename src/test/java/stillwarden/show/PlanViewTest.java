@@ -44,7 +44,7 @@ class PlanViewTest {
   void theTextGroupsTheNumbersAndNamesEveryAssumption() {
     String text = PlanView.text(plan());
     assertThat(text).containsSubsequence("Plan for Bench 4, fennel, as of 08:50:00", "boiling point here: 98.5 °C", "\nWater\n",
-        "coolant strategy: tempered, because the oil begins to freeze at 16 °C; the tap gives 12 °C", "\nOther\n", "foam class: not known",
+        "coolant strategy: tempered, because the oil begins to freeze at 16 °C; the tap gives 12 °C", "\nOther\n", "foam class: no value",
         "refill the reservoir 35 min after the first drop", "heater efficiency 60 to 85 %, a default",
         "pressure from the elevation (boiling point here)", "The site decides.");
   }

@@ -24,6 +24,22 @@ class TextViewTest {
   }
 
   @Test
+  void inSetUpTheFirstLineNamesTheFirstThingThatWouldChangeTheVerdict() {
+    Advice notYet = Samples.notYet();
+    List<Advice.Action> actions = List.of(Samples.action(1, "do-not-start", "Do not switch the heat on yet.", "WARNING", null),
+        notYet.actions().get(0));
+    Advice both = new Advice(notYet.rig(), notYet.at(), notYet.stage(), notYet.verdict(), actions, 0, List.of(), List.of(), List.of(),
+        List.of(), List.of(), List.of(), 39, 41, List.of(), notYet.defersTo());
+    assertThat(lines(both)[0]).isEqualTo("NOT YET: Clip every joint that gravity does not hold.");
+    assertThat(TextView.of(both)).contains("1 WARNING  Do not switch the heat on yet.");
+  }
+
+  @Test
+  void temperaturesAreReadInDegreesWhateverTheSentenceSays() {
+    assertThat(TextView.of(Samples.notYet())).contains("condenser.coolant.supply to 28 °C").doesNotContain(" Cel");
+  }
+
+  @Test
   void aStartSaysNoMoreThanWhatWasLookedAtAndWhoDecides() {
     String[] lines = lines(Samples.start());
     assertThat(lines[0]).isEqualTo("nothing found against starting: 41 of 41 looked at");
@@ -74,7 +90,7 @@ class TextViewTest {
   void numbersAreInTheUnitsOfTheBench() {
     assertThat(TextView.of(Samples.stop())).contains("boiling point here: 98.5 °C (98.5 °C to 98.6 °C)",
         "time to minimum level: 12 min (9 min to 17 min)", "water available: 610 mL\n",
-        "condenser capacity: not known: the jacket length is not stated");
+        "condenser capacity: no value: the jacket length is not stated");
   }
 
   @ParameterizedTest

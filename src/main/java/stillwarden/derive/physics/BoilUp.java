@@ -16,9 +16,7 @@ import org.hipparchus.stat.regression.SimpleRegression;
  * @param fitted true when measured
  */
 record BoilUp(Band kilograms, Band cubicMetres, double waterShare, double latent, boolean fitted, List<String> notes) {
-  private static final double WATER = 997;
   private static final double R = 8.314462618;
-  private static final double SLOWEST = 0.05;
   private static final double ALPHA = 0.1;
 
   BoilUp {
@@ -31,9 +29,9 @@ record BoilUp(Band kilograms, Band cubicMetres, double waterShare, double latent
         .map(t -> t.oilMassShare() / b.diffusion().nominal()).orElse(0.0);
     double boiling = b.boiling();
     double latent = (1 - oilShare) * WaterSteam.latentHeat(boiling) + oilShare * b.two.map(BoilUp::oilLatent).orElse(0.0);
-    double density = 1 / ((1 - oilShare) / WATER + oilShare / b.charge.oil().flatMap(Oil::density).orElse(900.0));
+    double density = 1 / ((1 - oilShare) / WaterSteam.COLD_DENSITY + oilShare / b.charge.oil().flatMap(Oil::density).orElseGet(() -> Limits.value("oil-density-default")));
     Optional<Band> assumed = b.heat.map(h -> h.net().times(1 / latent)).filter(k -> k.nominal() > 0)
-        .map(k -> new Band(Math.max(k.low(), SLOWEST * k.nominal()), k.nominal(), k.high()));
+        .map(k -> new Band(Math.max(k.low(), slowest() * k.nominal()), k.nominal(), k.high()));
     Optional<Band> measured = fit(b);
     List<String> notes = new ArrayList<>();
     if (measured.isPresent()) {
@@ -42,6 +40,11 @@ record BoilUp(Band kilograms, Band cubicMetres, double waterShare, double latent
     }
     b.heat.ifPresent(h -> notes.addAll(h.notes()));
     return assumed.map(k -> new BoilUp(k, k.times(1 / density), 1 - oilShare, latent, false, notes));
+  }
+
+  /** The slow end of a rate stays above this share of its nominal value, or times would have no end. */
+  static double slowest() {
+    return Limits.value("slowest-share");
   }
 
   /** W into the boil: measured where the rate is, else by the heater. */
@@ -81,18 +84,18 @@ record BoilUp(Band kilograms, Band cubicMetres, double waterShare, double latent
   /** Flask readings as water gone: less what was fed since. */
   private static List<RunState.Amount> boiledAway(RunState run) {
     return run.flaskReadings().stream()
-        .map(r -> new RunState.Amount(r.at(), run.fed() - run.fedSince(r.at()) - r.volume())).toList();
+        .map(r -> new RunState.Amount(r.at(), run.fed() - run.fedSince(r.at()) - r.si())).toList();
   }
 
   static Optional<Band> slope(List<RunState.Amount> readings, Instant from) {
     SimpleRegression line = new SimpleRegression();
-    readings.stream().filter(r -> !r.at().isBefore(from)).forEach(r -> line.addData((r.at().toEpochMilli() - from.toEpochMilli()) / 1000.0, r.volume()));
+    readings.stream().filter(r -> !r.at().isBefore(from)).forEach(r -> line.addData((r.at().toEpochMilli() - from.toEpochMilli()) / 1000.0, r.si()));
     if (line.getN() < Limits.value("fit-points-min") || line.getXSumSquares() <= 0 || !(line.getSlope() > 0)) {
       return Optional.empty();
     }
     double slope = line.getSlope();
     double spread = line.getSlopeConfidenceInterval(ALPHA);
     double half = Double.isFinite(spread) ? spread : 0;
-    return Optional.of(new Band(Math.max(SLOWEST * slope, slope - half), slope, slope + half));
+    return Optional.of(new Band(Math.max(slowest() * slope, slope - half), slope, slope + half));
   }
 }

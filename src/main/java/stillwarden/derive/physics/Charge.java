@@ -39,17 +39,25 @@ public record Charge(
   static final String REST = "rest of the oil (make-up not stated)";
   private static final String MAKEUP = "charge.oil.makeup.";
 
+  /** True when the amount of oil is that of the charge, not the 1 kg that stands for an unknown one. */
+  public boolean oilAmountKnown() {
+    return oil.isPresent() && oilMass.filter(m -> m.nominal() > 0).isPresent();
+  }
+
   public static Charge of(Rig rig) {
+    return of(rig, rig.word("charge.plant").map(p -> Knowledge.section("plants").get(p)).orElse(Tree.EMPTY));
+  }
+
+  static Charge of(Rig rig, Tree plant) {
     List<String> notes = new ArrayList<>();
     List<String> missing = new ArrayList<>();
-    Tree plant = rig.word("charge.plant").map(p -> Knowledge.section("plants").get(p)).orElse(Tree.EMPTY);
     boolean solids = rig.word("charge.plant").isPresent() || rig.word("charge.material").isPresent();
     Optional<Double> mass = rig.si("charge.material-mass");
     if (solids && mass.isEmpty()) {
       missing.add("charge.material-mass");
     }
     Optional<Band> oilMass = oilMass(rig, plant, mass, notes);
-    Optional<Oil> oil = oil(rig, plant, oilMass.map(Band::nominal).orElse(1.0), notes);
+    Optional<Oil> oil = oil(rig, plant, oilMass.map(Band::nominal).filter(m -> m > 0).orElse(1.0), notes);
     if (oil.isEmpty()) {
       missing.add("charge.oil.makeup");
     }

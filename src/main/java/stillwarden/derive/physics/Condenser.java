@@ -14,7 +14,6 @@ import stillwarden.describe.Part;
  * @param medium {@code water, still-water, air}
  */
 public record Condenser(Band area, Band supply, Optional<Double> flow, String medium, boolean supplyAssumed, List<String> notes) {
-  private static final double WATER = 998;
 
   public Condenser {
     notes = List.copyOf(notes);
@@ -30,7 +29,7 @@ public record Condenser(Band area, Band supply, Optional<Double> flow, String me
     if (supply.isEmpty()) {
       notes.add("coolant temperature not stated: default band");
     }
-    Optional<Double> flow = run.flow().or(() -> part.si("coolant.flow")).map(v -> v * WATER);
+    Optional<Double> flow = run.flow().or(() -> part.si("coolant.flow")).map(v -> v * WaterSteam.COLD_DENSITY);
     String medium = medium(part);
     if (flow.isEmpty() && medium.equals("water")) {
       notes.add("coolant flow not stated: as much as keeps its warming to the limit");

@@ -55,7 +55,7 @@ record CondenserNumbers(
     double inlet = condenser.map(c -> c.supply().nominal()).orElseGet(() -> Limits.band("assumed-supply").nominal());
     double rise = Math.min(b.allowed().coolantRise(), Math.max(1, b.boiling() - inlet - 5));
     duty.ifPresentOrElse(
-        d -> out.put("coolant-flow-least", d.map(q -> Condenser.leastFlow(q, rise, inlet) / 998),
+        d -> out.put("coolant-flow-least", d.map(q -> Condenser.leastFlow(q, rise, inlet) / WaterSteam.COLD_DENSITY),
             String.format(Locale.ROOT, "duty at a warming of %.0f K", rise), "IAPWS-IF97; " + Limits.source("coolant-rise-max"), List.of()),
         () -> out.absent("coolant-flow-least", "heater power or flask size not stated", "mantle.power", "flask.volume"));
     Optional<Band> outlet = condenser.flatMap(c -> duty.flatMap(c::outlet));
@@ -85,7 +85,7 @@ record CondenserNumbers(
     for (double f = least; f <= 10 * least; f *= 1.1) {
       Condenser faster = new Condenser(c.area(), c.supply(), Optional.of(f), c.medium(), c.supplyAssumed(), c.notes());
       if (faster.capacity(b.boiling(), b.allowed()).nominal() >= wanted) {
-        return Optional.of(Math.ceil(f / 998 * 6e5) / 10);
+        return Optional.of(Math.ceil(f / WaterSteam.COLD_DENSITY * 6e5) / 10);
       }
     }
     return Optional.empty();
@@ -103,6 +103,6 @@ record CondenserNumbers(
 
   /** Seconds. */
   static Band jacketWarming(double volume, double from, double to, Band duty) {
-    return Band.of(Math.max(0, volume * 998 * WaterSteam.warming(from, Math.max(from, to)))).over(duty);
+    return Band.of(Math.max(0, volume * WaterSteam.COLD_DENSITY * WaterSteam.warming(from, Math.max(from, to)))).over(duty);
   }
 }

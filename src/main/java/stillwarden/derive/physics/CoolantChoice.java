@@ -102,7 +102,8 @@ public record CoolantChoice(
 
   private static Draft cannotWarm(Inputs in, double wanted, String freezes) {
     boolean heldOff = in.airEnough() && in.policy().permits("held-off-coolant");
-    Draft d = new Draft(heldOff ? "held-off" : "before-heat", heldOff ? wanted : in.warmest().orElse(in.inlet()));
+    double warmest = in.warmest().orElse(in.inlet());
+    Draft d = new Draft(heldOff ? "held-off" : warmest > in.inlet() ? "tempered" : "before-heat", heldOff ? wanted : warmest);
     d.feasible = heldOff;
     d.reasons.add(freezes);
     if (in.warmest().isEmpty()) {

@@ -31,6 +31,9 @@ final class CoolantNumbers {
     Optional<Double> expect = freezing.from(inlet);
     CoolantChoice choice = CoolantChoice.of(inputs(b, part, condenser, duty, freezing.highest().get().nominal(), inlet, stated), watch, expect);
     List<String> reasons = new ArrayList<>(choice.reasons());
+    if (freezing.gaps()) {
+      reasons.add("for part of the run the melting points are not known, watch for crystals: " + String.join(", ", freezing.unknown()));
+    }
     choice.alternatives().forEach(a -> reasons.add("or: " + a));
     out.word("coolant-strategy", choice.strategy(), SOURCE, reasons);
     out.put("coolant-temperature", Band.of(choice.kelvin()), "freezing temperature of what condenses + 2 K, within what the site supplies", SOURCE, reasons);
@@ -70,11 +73,11 @@ final class CoolantNumbers {
       out.absent(name, String.format(Locale.ROOT, "not with coolant at %.0f Cel: what condenses stays liquid", inlet - 273.15));
       return;
     }
-    if (b.course.isEmpty() || rate.isEmpty() || now.heatLeft().isEmpty() || (b.run.started() && !b.run.heatOn())) {
-      out.absent(name, String.format(Locale.ROOT, "from %.0f %% of the oil over; no rate to turn that into a time", watch.get() * 100));
+    if (b.course.isEmpty() || !b.charge.oilAmountKnown() || rate.isEmpty() || now.heatLeft().isEmpty() || (b.run.started() && !b.run.heatOn())) {
+      out.absent(name, String.format(Locale.ROOT, "from %.0f %% of the oil over; rate or amount of oil not known, or heat off: no time", watch.get() * 100), "charge.oil.expected", "mantle.power");
       return;
     }
-    double ideal = b.course.get().atShare(watch.get()).water() / 997;
+    double ideal = b.course.get().atShare(watch.get()).water() / WaterSteam.COLD_DENSITY;
     Band slower = b.diffusion();
     Band volume = new Band(ideal, ideal * slower.nominal(), ideal * slower.high());
     Band left = volume.minus(now.collected().orElse(Band.of(0))).atLeast(0);

@@ -17,8 +17,6 @@ import stillwarden.describe.Rig;
  * @param measured true when the electrical power was read, not assumed
  */
 public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net, boolean measured, List<String> notes) {
-  private static final double DEFAULT_ROOM = 293.15;
-
   public Heat {
     notes = List.copyOf(notes);
   }
@@ -103,15 +101,15 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
   static double room(Rig rig, RunState run, List<String> notes) {
     Optional<Double> room = run.room().or(() -> rig.si("place.room"));
     if (room.isEmpty()) {
-      notes.add("room temperature not stated: 20 Cel assumed");
+      notes.add("room temperature not stated: assumed");
     }
-    return room.orElse(DEFAULT_ROOM);
+    return room.orElseGet(() -> Limits.value("assumed-room"));
   }
 
   /** Heat that the charge takes a kelvin, J/K. */
   static Band capacity(Charge charge, double water, Optional<Double> flaskVolume) {
     Band glass = flaskVolume.map(v -> Limits.byFlask("glass-mass", v, 1e-3)).orElse(Band.of(0));
-    double liquid = water * 998 * WaterSteam.liquidHeatCapacity(333, 101_325);
+    double liquid = water * WaterSteam.COLD_DENSITY * WaterSteam.liquidHeatCapacity(333, 101_325);
     double plant = charge.plantMass() * Limits.value("plant-heat-capacity");
     return glass.times(Limits.value("glass-heat-capacity")).plus(Band.of(liquid + plant));
   }

@@ -5,7 +5,9 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Stream;
 import stillwarden.derive.Estimate;
+import stillwarden.describe.Rig;
 
 /**
  * Everything computed for one rig at one moment.
@@ -66,6 +68,11 @@ public record Numbers(Map<String, Estimate> all, Map<String, String> words, Side
         Map.entry("L/min", new double[] {6e4, 0}), Map.entry("s", new double[] {1, 0}), Map.entry("", new double[] {1, 0}));
     private final Map<String, Estimate> all = new LinkedHashMap<>();
     private final Map<String, String> words = new LinkedHashMap<>();
+    private final Rig rig;
+
+    Out(Rig rig) {
+      this.rig = rig;
+    }
 
     void put(String name, Band si, String method, String source, List<String> notes) {
       double[] f = FROM_SI.get(UNITS.get(name));
@@ -78,11 +85,8 @@ public record Numbers(Map<String, Estimate> all, Map<String, String> words, Side
     }
 
     void absent(String name, String reason, String... missing) {
-      all.put(name, Estimate.absent(name, UNITS.get(name), reason, List.of(missing)));
-    }
-
-    boolean has(String name) {
-      return all.containsKey(name);
+      List<String> paths = Stream.of(missing).map(p -> Roles.path(rig, p)).filter(p -> rig.datum(p).isEmpty()).toList();
+      all.put(name, Estimate.absent(name, UNITS.get(name), reason, paths));
     }
 
     Numbers with(SideFacts facts) {

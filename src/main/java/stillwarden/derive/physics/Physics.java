@@ -28,52 +28,85 @@ public final class Physics {
   static Worked of(Bench b) {
     Optional<BoilUp> rate = BoilUp.of(b);
     Progress now = Progress.of(b, rate);
-    Numbers.Out out = new Numbers.Out();
+    Numbers.Out out = new Numbers.Out(b.rig);
     BoilingNumbers.put(b, out);
     TimeNumbers.put(b, rate, now, out);
     CondenserNumbers condenser = CondenserNumbers.put(b, rate, now, out);
     PressureNumbers.put(b, rate, now, out);
-    return new Worked(b, rate, now, condenser.choice(), out.with(facts(b, now, condenser)));
+    return new Worked(b, rate, now, condenser.choice(), out.with(facts(b, rate, now, condenser)));
   }
 
-  private static SideFacts facts(Bench b, Progress now, CondenserNumbers condenser) {
-    Optional<Feed> feed = Feed.last(b);
+  private static SideFacts facts(Bench b, Optional<BoilUp> rate, Progress now, CondenserNumbers condenser) {
+    Optional<Feed> feed = Feed.last(b, rate);
     return new SideFacts(
         b.atmosphere, b.charge.oil(), b.immiscible, BoilingNumbers.hardlyVolatile(b), b.two.map(TwoLiquids::unknown).orElse(List.of()),
         condenser.verdict(), condenser.choice(), condenser.liquidusNow(), condenser.liquidusHighest(), condenser.freezesInTakeOff(),
         b.volume.map(b::minimumLevel), now.flask(), now.reservoir(), now.receiver(), now.collected(), now.leak(),
-        feed.map(Feed::recovered), feed.map(Feed::stopsBoil).orElse(false), now.boilsFrom(), cooling(b, now), condenser.jacketWarmsIn(),
-        WaterBudget.shortage(b), mantle(b), b.charge.foams(), fillLimit(b), b.charge);
+        feed.map(Feed::recovered), feed.map(Feed::stopsBoil).orElse(false), now.boilsFrom(), cooling(b, now, Limits.value("hand-warm-max", b.policy)),
+        cooling(b, now, b.boiling() - Limits.value("quiet-below-boiling-min", b.policy)), condenser.jacketWarmsIn(),
+        WaterBudget.shortage(b), overfull(b), receiver(b), mantle(b), b.charge.foams(), fillLimit(b), b.charge);
   }
 
-  /** The last cold feed: when the boil has made up for it, and whether it was so much that boiling must stop. */
+  /** Cold feeds so far: when the boil has made up for them, and whether they were so much that boiling must stop. */
   private record Feed(Instant recovered, boolean stopsBoil) {
-    static Optional<Feed> last(Bench b) {
-      List<RunState.Amount> feeds = b.run.feeds();
-      double net = b.heat.map(h -> h.net().nominal()).orElse(0.0);
-      if (feeds.isEmpty() || net <= 0) {
+    static Optional<Feed> last(Bench b, Optional<BoilUp> rate) {
+      double net = BoilUp.net(b, rate).map(Band::nominal).orElse(0.0);
+      if (b.run.feeds().isEmpty() || net <= 0) {
         return Optional.empty();
       }
-      RunState.Amount last = feeds.get(feeds.size() - 1);
       double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
-      double seconds = ClosedVessel.reboil(last.volume() * 998, from, b.boiling(), net);
-      // one quarter of a check interval's heat taken by the feed still boils on; more stops it for a time
-      boolean stops = seconds > Limits.value("feed-share") * 60;
-      return Optional.of(new Feed(last.at().plusMillis((long) (1000 * seconds)), stops));
+      Instant until = Instant.MIN;
+      boolean stops = false;
+      for (RunState.Amount f : b.run.feeds()) {
+        // what an earlier feed still owes is added to the next one's debt
+        Instant start = until.isAfter(f.at()) ? until : f.at();
+        until = start.plusMillis((long) (1000 * ClosedVessel.reboil(f.si() * WaterSteam.COLD_DENSITY, from, b.boiling(), net)));
+        stops = Duration.between(f.at(), until).toSeconds() > Limits.value("feed-stops-after");
+      }
+      return Optional.of(new Feed(until, stops));
     }
   }
 
-  private static Optional<Duration> cooling(Bench b, Progress now) {
+  /** A standing flask, from the boil down to a temperature. */
+  private static Optional<Band> cooling(Bench b, Progress now, double to) {
     if (b.volume.isEmpty() || now.flask().isEmpty()) {
       return Optional.empty();
     }
     Band capacity = Heat.capacity(b.charge, now.flask().get().high(), b.volume);
-    return ClosedVessel.cooling(capacity, b.volume.get(), b.boiling(), Limits.value("hand-warm-max", b.policy), b.room)
-        .map(s -> Duration.ofSeconds((long) s.high()));
+    return ClosedVessel.cooling(capacity, b.volume.get(), b.boiling(), to, b.room);
   }
 
   private static Optional<Double> fillLimit(Bench b) {
     return b.charge.foams().map(f -> Limits.value(f.equals("strongly") ? "flask-fill-max-foaming" : "flask-fill-max", b.policy));
+  }
+
+  private static Optional<SideFacts.Shortage> overfull(Bench b) {
+    Optional<Double> limit = fillLimit(b);
+    if (limit.isEmpty() || b.volume.isEmpty() || b.charge.water().isEmpty()) {
+      return Optional.empty();
+    }
+    double content = b.charge.water().get() + b.charge.displaced().nominal();
+    double allowed = limit.get() * b.volume.get();
+    if (content <= allowed) {
+      return Optional.empty();
+    }
+    return Optional.of(new SideFacts.Shortage(
+        String.format(Locale.ROOT, "%.0f %% full, %.0f %% allowed for this charge", 100 * content / b.volume.get(), 100 * limit.get()),
+        List.of(String.format(Locale.ROOT, "%.0f mL less in the flask", Math.ceil((content - allowed) * 1e6)),
+            String.format(Locale.ROOT, "a flask of at least %.0f mL", Math.ceil(content / limit.get() * 1e6)))));
+  }
+
+  private static Optional<SideFacts.Shortage> receiver(Bench b) {
+    Optional<Double> volume = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> target = b.rig.si("target.distillate");
+    double factor = Limits.value("receiver-capacity-min", b.policy);
+    if (volume.isEmpty() || target.isEmpty() || volume.get() >= factor * target.get()) {
+      return Optional.empty();
+    }
+    return Optional.of(new SideFacts.Shortage(
+        String.format(Locale.ROOT, "the receiver holds %.0f mL, %.0f mL are planned", volume.get() * 1e6, target.get() * 1e6),
+        List.of(String.format(Locale.ROOT, "a receiver of at least %.0f mL", Math.ceil(factor * target.get() * 1e6)),
+            String.format(Locale.ROOT, "target down to %.0f mL", Math.floor(volume.get() / factor * 1e6)))));
   }
 
   private static Optional<SideFacts.Fit> mantle(Bench b) {

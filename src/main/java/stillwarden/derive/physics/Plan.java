@@ -56,8 +56,8 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
     List<End> ends() {
       List<End> ends = new ArrayList<>();
       b.rig.si("target.distillate").ifPresent(v -> ends.add(end("target", v)));
-      if (b.course.filter(Fractionation::complete).isPresent() && b.charge.oilMass().isPresent()) {
-        ends.add(end("oil-over", b.course.get().waterForAll() * b.diffusion().nominal() / 997));
+      if (b.course.filter(Fractionation::complete).isPresent() && b.charge.oilAmountKnown()) {
+        ends.add(end("oil-over", b.course.get().waterForAll() * b.diffusion().nominal() / WaterSteam.COLD_DENSITY));
       }
       if (reservoir > 0) {
         ends.add(end("reservoir", reservoir / rate.waterShare()));
@@ -96,7 +96,7 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
       out.add(curve("reservoir-level", "mL", t, s -> volume(s).map(v -> Math.max(0, reservoir - v * rate.waterShare())), 1e6));
       out.add(curve("receiver-level", "mL", t, this::volume, 1e6));
       out.add(curve("head-temperature", "Cel", t, this::head, 1, -273.15));
-      if (b.course.isPresent()) {
+      if (b.course.isPresent() && b.charge.oilAmountKnown()) {
         oil(t, out);
       }
       return out;
@@ -104,11 +104,12 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
 
     private void oil(double[] t, List<Curve> out) {
       Fractionation run = b.course.get();
-      if (b.charge.oilMass().isPresent()) {
-        out.add(curve("oil-collected", "g", t, s -> over(s).map(w -> run.atWater(w).oil()), 1e3));
+      out.add(curve("oil-collected", "g", t, s -> over(s).map(w -> run.atWater(w).oil()), 1e3));
+      // where the melting points of what condenses are not known, there is no such curve rather than a made-up one
+      if (run.points().stream().allMatch(x -> Liquidus.of(run.oil().parts(), x.vapour()).kelvin().isPresent())) {
+        out.add(curve("freezing-point-of-condensate", "Cel", t, s -> over(s).map(w -> Liquidus.of(run.oil().parts(), run.atWater(w).vapour())
+            .kelvin().orElseThrow().nominal()), 1, -273.15));
       }
-      out.add(curve("freezing-point-of-condensate", "Cel", t, s -> over(s).map(w -> Liquidus.of(run.oil().parts(), run.atWater(w).vapour()).kelvin()
-          .map(Band::nominal).orElse(200.0)), 1, -273.15));
       for (int i = 0; i < run.oil().parts().size(); i++) {
         int k = i;
         out.add(curve("share-of-condensing-oil." + run.oil().parts().get(i).substance().id(), "%", t, s -> over(s).map(w -> run.atWater(w).vapour()[k]), 100));
@@ -122,7 +123,7 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
 
     /** kg of water as it would be in an ideal run. */
     private Band over(double s) {
-      return volume(s).times(997 * rate.waterShare()).over(b.diffusion());
+      return volume(s).times(WaterSteam.COLD_DENSITY * rate.waterShare()).over(b.diffusion());
     }
 
     private double flask(double boiled) {
@@ -134,7 +135,7 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
       if (s < heatUp.nominal()) {
         return Band.of(b.room);
       }
-      return b.course.map(run -> over(s).map(w -> w >= run.waterForAll() ? b.water : run.atWater(w).kelvin())).orElse(Band.of(b.boiling()));
+      return b.course.filter(run -> b.charge.oilAmountKnown()).map(run -> over(s).map(w -> w >= run.waterForAll() ? b.water : run.atWater(w).kelvin())).orElse(Band.of(b.boiling()));
     }
 
     private static Curve curve(String name, String unit, double[] t, java.util.function.DoubleFunction<Band> at, double factor) {

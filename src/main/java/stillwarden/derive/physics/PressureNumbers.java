@@ -6,8 +6,6 @@ import java.util.Optional;
 
 /** Vent, seal and closed system (physics section 8). */
 final class PressureNumbers {
-  private static final double LITTLE_WATER = 0.02;
-
   private PressureNumbers() {}
 
   static void put(Bench b, Optional<BoilUp> rate, Progress now, Numbers.Out out) {
@@ -53,7 +51,7 @@ final class PressureNumbers {
       out.absent("seal-back-pressure", "no tip or hose is stated to stand under liquid");
       return;
     }
-    out.put("seal-back-pressure", Limits.band("seal-depth-default").map(d -> ClosedVessel.seal(d, 998)), "depth x density x gravity", "PRACTICE",
+    out.put("seal-back-pressure", Limits.band("seal-depth-default").map(d -> ClosedVessel.seal(d, WaterSteam.COLD_DENSITY)), "depth x density x gravity", "PRACTICE",
         List.of("depth not stated: default band; the same suction lifts liquid up the tip when the flask cools"));
   }
 
@@ -63,15 +61,16 @@ final class PressureNumbers {
       out.absent(name, "heater power, flask size or water not stated", "mantle.power", "flask.volume", "charge.water");
       return;
     }
-    Band water = now.flask().get().minus(b.charge.displaced()).atLeast(0).times(958);
+    Band water = now.flask().get().minus(b.charge.displaced()).atLeast(0).times(WaterSteam.BOILING_DENSITY);
     Band glass = b.glassCapacity();
     Band power = net.get();
-    double slowest = Math.max(power.low(), 0.2 * power.nominal());
+    double slowest = Math.max(power.low(), BoilUp.slowest() * power.nominal());
     Band seconds = new Band(seconds(b, over, water.low(), glass.low(), power.high()), seconds(b, over, water.nominal(), glass.nominal(), power.nominal()),
         seconds(b, over, water.high(), glass.high(), slowest));
-    double dry = seconds(b, over, LITTLE_WATER, glass.low(), power.high());
+    double little = Limits.value("little-water");
+    double dry = seconds(b, over, little * WaterSteam.BOILING_DENSITY, glass.low(), power.high());
     out.put(name, seconds, "liquid and glass along the saturation line, closed while boiling", "IAPWS-IF97",
-        List.of(String.format(java.util.Locale.ROOT, "with 20 mL left in the flask %.1f s", dry), "laboratory glass of this kind is not rated for pressure"));
+        List.of(String.format(java.util.Locale.ROOT, "with %.0f mL left in the flask %.1f s", little * 1e6, dry), "laboratory glass of this kind is not rated for pressure"));
   }
 
   private static double seconds(Bench b, double over, double water, double glass, double net) {

@@ -45,7 +45,7 @@ record Progress(
     if (into.nominal() <= 0) {
       return Optional.empty();
     }
-    Band slow = new Band(Math.max(into.low(), into.nominal() * 0.2), into.nominal(), into.high());
+    Band slow = new Band(Math.max(into.low(), into.nominal() * BoilUp.slowest()), into.nominal(), into.high());
     return Optional.of(Heat.capacity(b.charge, b.charge.water().get(), b.volume).times(Math.max(0, b.boiling() - b.room)).over(slow));
   }
 
@@ -60,6 +60,13 @@ record Progress(
   private static Optional<Band> wait(Bench b, Optional<Band> heatUp) {
     if (b.run.boilingSince().isPresent()) {
       return Optional.of(Band.of(0));
+    }
+    if (b.run.flaskTemperature().isPresent() && b.boiling() > b.room) {
+      // a temperature read on the way up says more than the clock
+      RunState.Amount read = b.run.flaskTemperature().get();
+      double left = Math.max(0, (b.boiling() - read.si()) / (b.boiling() - b.room));
+      double since = b.run.secondsSince(read.at());
+      return heatUp.map(h -> h.times(left).minus(Band.of(since)).atLeast(0));
     }
     double gone = b.run.heatSince().map(b.run::secondsSince).orElse(0.0);
     return heatUp.map(h -> h.minus(Band.of(gone)).atLeast(0));
@@ -133,7 +140,7 @@ record Progress(
     if (!readings.isEmpty()) {
       RunState.Amount last = readings.get(readings.size() - 1);
       double seconds = boiledSince(b, boils, last.at());
-      Band seen = Band.of(last.volume());
+      Band seen = Band.of(last.si());
       return Optional.of(rate.map(r -> seen.plus(r.cubicMetres().times(seconds))).orElse(seen));
     }
     Instant from = b.run.heatSince().orElse(b.run.at());
@@ -153,12 +160,12 @@ record Progress(
     }
     double fed = b.run.fed() - b.run.fedSince(look.at());
     double gone = b.charge.water().get() + b.charge.displaced().low() + fed - b.charge.uptake().high() - seen.get().high() - error.high();
-    double most = b.heat.get().full().high() * seconds(b, heatUp, look.at()) / WaterSteam.latentHeat(b.boiling()) / 958;
+    double most = b.heat.get().full().high() * seconds(b, heatUp, look.at()) / WaterSteam.latentHeat(b.boiling()) / WaterSteam.BOILING_DENSITY;
     if (gone <= most) {
       return Optional.empty();
     }
     List<String> why = new ArrayList<>();
-    boolean cameOver = collected.filter(c -> !b.run.collected().isEmpty() && c.high() >= 0.8 * gone).isPresent();
+    boolean cameOver = collected.filter(c -> !b.run.collected().isEmpty() && c.high() >= Limits.value("came-over-share") * gone).isPresent();
     why.add(String.format(java.util.Locale.ROOT, "%.0f mL are gone from the flask, the heater could have boiled at most %.0f mL", gone * 1e6, most * 1e6));
     why.add(cameOver ? "as much came over: the power in the rig file or the time of heat-on is wrong" : "not in the receiver: a leak or a wrong entry");
     return Optional.of(String.join("; ", why));

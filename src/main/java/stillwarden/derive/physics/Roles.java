@@ -57,6 +57,22 @@ final class Roles {
     return own.isPresent() ? own : first(rig, p -> p.kind().equals(ROUND) && !flask(rig).filter(p::equals).isPresent());
   }
 
+  /** A path by role ({@code mantle.power}) in the user's own part names; a role that no part plays keeps its word. */
+  static String path(Rig rig, String byRole) {
+    int dot = byRole.indexOf('.');
+    String role = dot < 0 ? byRole : byRole.substring(0, dot);
+    Optional<Part> part = switch (role) {
+      case "mantle" -> heater(rig);
+      case "flask" -> flask(rig);
+      case "reservoir" -> reservoir(rig);
+      case "condenser" -> condenser(rig);
+      case "take-off" -> takeOff(rig);
+      case "receiver" -> receiver(rig);
+      default -> Optional.empty();
+    };
+    return part.map(p -> p.name() + byRole.substring(role.length())).orElse(byRole);
+  }
+
   private static Optional<Part> first(Rig rig, Predicate<Part> which) {
     return rig.parts().values().stream().filter(which).findFirst();
   }

@@ -39,13 +39,14 @@ record RunState(
     Optional<Double> supply,
     Optional<Double> flow,
     Optional<Double> room,
-    Optional<Double> barometer) {
+    Optional<Double> barometer,
+    Optional<Amount> flaskTemperature) {
 
   /** A look at a level: its word or its quantity. */
   record Look(Instant at, String word, Optional<Double> volume) {}
 
-  /** A volume at a time, m3. */
-  record Amount(Instant at, double volume) {}
+  /** A volume (m3) or a temperature (K) at a time. */
+  record Amount(Instant at, double si) {}
 
   private static final Set<String> CUTS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas", "keep-heat-off", "lower-heat");
   private static final Set<String> HEATS = Set.of("heat-on", "set-heat", "reduce-heat", "raise-heat", "restart-low");
@@ -61,11 +62,11 @@ record RunState(
   }
 
   double fed() {
-    return feeds.stream().mapToDouble(Amount::volume).sum();
+    return feeds.stream().mapToDouble(Amount::si).sum();
   }
 
   double fedSince(Instant t) {
-    return feeds.stream().filter(f -> f.at().isAfter(t)).mapToDouble(Amount::volume).sum();
+    return feeds.stream().filter(f -> f.at().isAfter(t)).mapToDouble(Amount::si).sum();
   }
 
   double secondsSince(Instant t) {
@@ -92,6 +93,7 @@ record RunState(
     private Double flow;
     private Double room;
     private Double barometer;
+    private Amount flaskTemperature;
 
     Reader(Instant at) {
       this.at = at;
@@ -120,6 +122,8 @@ record RunState(
       } else if (e.id().equals("swap-receiver")) {
         swapped += si(e, Dimension.VOLUME).orElseGet(() -> receiver == null ? 0 : receiver.volume().orElse(0.0));
         receiver = new Look(e.at(), "empty", Optional.of(0.0));
+      } else if (e.id().equals("set-coolant")) {
+        flow = si(e, Dimension.VOLUME_FLOW).orElse(flow);
       } else if (e.id().equals("refill-reservoir")) {
         reservoir = new Look(e.at(), "full", si(e, Dimension.VOLUME));
       }
@@ -150,6 +154,7 @@ record RunState(
         }
         case "coolant-supply-temperature" -> supply = si(e, Dimension.TEMPERATURE).orElse(supply);
         case "coolant-flow" -> flow = si(e, Dimension.VOLUME_FLOW).orElse(flow);
+        case "flask-temperature" -> flaskTemperature = si(e, Dimension.TEMPERATURE).map(t -> new Amount(e.at(), t)).orElse(flaskTemperature);
         case "room-temperature" -> room = si(e, Dimension.TEMPERATURE).orElse(room);
         case "barometer" -> barometer = si(e, Dimension.PRESSURE).orElse(barometer);
         case "power" -> heatOn = heatOn && !e.text().equals("lost");
@@ -159,7 +164,11 @@ record RunState(
 
     private void boils(Entry e) {
       boilingSince = boilingSince == null ? e.at() : boilingSince;
-      heatSince = heatSince == null ? e.at() : heatSince;
+      if (heatSince == null) {
+        // it boils, so it is heated, whoever forgot to write that down
+        heatSince = e.at();
+        heatOn = true;
+      }
     }
 
     private static Look look(Entry e) {
@@ -175,7 +184,8 @@ record RunState(
       return new RunState(now, Optional.ofNullable(heatSince), heatOn, Optional.ofNullable(setting), Optional.ofNullable(settingSince),
           Optional.ofNullable(watts), Optional.ofNullable(boilingSince), List.copyOf(feeds), swapped, Optional.ofNullable(flask),
           Optional.ofNullable(reservoir), Optional.ofNullable(receiver), List.copyOf(collected), List.copyOf(flaskReadings),
-          Optional.ofNullable(supply), Optional.ofNullable(flow), Optional.ofNullable(room), Optional.ofNullable(barometer));
+          Optional.ofNullable(supply), Optional.ofNullable(flow), Optional.ofNullable(room), Optional.ofNullable(barometer),
+          Optional.ofNullable(flaskTemperature));
     }
   }
 }

@@ -1,6 +1,5 @@
 package stillwarden.derive.physics;
 
-import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
@@ -25,9 +24,12 @@ import java.util.Optional;
  * @param feedRecovery after the last cold feed: until when a weak boil is explained
  * @param feedStopsBoil the last feed was so much that boiling must stop
  * @param boilsFrom when boiling is computed or was seen to begin
- * @param coolsToHandWarm time a flask left standing takes to hand-warm
+ * @param coolsToHandWarm s that a flask left standing takes to hand-warm; the high end is the one to wait for
+ * @param coolsToQuiet s that it takes to fall as far under its boiling point as the site asks before anything is opened
  * @param jacketWarmsIn time in which a full still jacket reaches the oil's freezing temperature, s
  * @param waterBudget what is short and by how much; empty when enough
+ * @param overfull the flask against its fill limit; empty when within it or when the foam class is unknown
+ * @param receiverTooSmall against the planned distillate
  * @param mantle fit of heater to flask: true fits
  * @param foams foam class, by rig or plant list
  * @param fillLimit share of the flask allowed for this foam class
@@ -53,9 +55,12 @@ public record SideFacts(
     Optional<Instant> feedRecovery,
     boolean feedStopsBoil,
     Optional<Instant> boilsFrom,
-    Optional<Duration> coolsToHandWarm,
+    Optional<Band> coolsToHandWarm,
+    Optional<Band> coolsToQuiet,
     Optional<Band> jacketWarmsIn,
     Optional<Shortage> waterBudget,
+    Optional<Shortage> overfull,
+    Optional<Shortage> receiverTooSmall,
     Optional<Fit> mantle,
     Optional<String> foams,
     Optional<Double> fillLimit,

@@ -72,7 +72,7 @@ final class TimeNumbers {
       return;
     }
     double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
-    double perCubicMetre = 998 * WaterSteam.warming(from, b.boiling());
+    double perCubicMetre = WaterSteam.COLD_DENSITY * WaterSteam.warming(from, b.boiling());
     out.put("feed-limit", net.get().times(Limits.value("feed-share") / perCubicMetre), "feed that takes a quarter of the net heat", "PRACTICE; IAPWS-IF97", notes());
   }
 
@@ -89,16 +89,22 @@ final class TimeNumbers {
     if (left.isEmpty()) {
       left = b.rig.si("target.oil").flatMap(this::forOil);
     }
+    Optional<Double> planned = b.rig.si("target.time");
+    if (left.isEmpty() && planned.isPresent()) {
+      double gone = b.run.heatSince().map(b.run::secondsSince).orElse(0.0);
+      out.put("time-to-target", Band.of(Math.max(0, planned.get() - gone)), "planned time less time since heat-on", "the rig file", List.of());
+      return;
+    }
     time("time-to-target", left, "what is still to come over", "target.distillate", "target.oil");
   }
 
   /** m3 of distillate that bring a mass of oil. */
   private Optional<Band> forOil(double kilograms) {
-    if (b.course.isEmpty() || b.charge.oilMass().isEmpty() || now.collected().isEmpty()) {
+    if (b.course.isEmpty() || !b.charge.oilAmountKnown() || now.collected().isEmpty()) {
       return Optional.empty();
     }
     double share = kilograms / b.charge.oilMass().get().nominal();
-    Band water = b.diffusion().times(b.course.get().atShare(share).water() / 997);
+    Band water = b.diffusion().times(b.course.get().atShare(share).water() / WaterSteam.COLD_DENSITY);
     return Optional.of(water.minus(now.collected().get()).atLeast(0));
   }
 

@@ -7,8 +7,6 @@ import java.util.Optional;
 
 /** Water that the oil needs against water that there is. */
 final class WaterBudget {
-  private static final double DENSITY = 997;
-
   private WaterBudget() {}
 
   static void put(Bench b, Numbers.Out out, Optional<String> whyNot, List<String> notes) {
@@ -39,7 +37,7 @@ final class WaterBudget {
     double nominal = b.charge.oilMass().get().nominal();
     double perKilogram = nominal > 0 ? b.course.get().waterForAll() / nominal : 0;
     double error = Math.min(0.9, b.two.orElseThrow().error());
-    return Optional.of(b.charge.oilMass().get().times(perKilogram / DENSITY).times(new Band(1 - error, 1, 1 + error)));
+    return Optional.of(b.charge.oilMass().get().times(perKilogram / WaterSteam.COLD_DENSITY).times(new Band(1 - error, 1, 1 + error)));
   }
 
   /** m3 that can still be boiled. */

@@ -8,6 +8,9 @@ package stillwarden.derive.physics;
  */
 public final class WaterSteam {
   public static final double MOLAR_MASS = 0.018015268;
+  /** kg/m3 at 20 degC and at the boil: where the temperature of a measured volume does not matter more. */
+  public static final double COLD_DENSITY = 998.2;
+  public static final double BOILING_DENSITY = 958.4;
   private static final double GAS_CONSTANT = 461.526;
   private static final double CRITICAL_K = 647.096;
   private static final double CRITICAL_DENSITY = 322;

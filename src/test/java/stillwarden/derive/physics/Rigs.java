@@ -31,7 +31,7 @@ final class Rigs {
       Map.entry("W", new Unit(1, 0, Dimension.POWER)), Map.entry("Cel", new Unit(1, 273.15, Dimension.TEMPERATURE)),
       Map.entry("kPa", new Unit(1e3, 0, Dimension.PRESSURE)), Map.entry("m", new Unit(1, 0, Dimension.LENGTH)),
       Map.entry("mm", new Unit(1e-3, 0, Dimension.LENGTH)), Map.entry("g", new Unit(1e-3, 0, Dimension.MASS)),
-      Map.entry("%", new Unit(1e-2, 0, Dimension.FRACTION)), Map.entry("L/min", new Unit(1e-3 / 60, 0, Dimension.VOLUME_FLOW)));
+      Map.entry("%", new Unit(1e-2, 0, Dimension.FRACTION)), Map.entry("min", new Unit(60, 0, Dimension.TIME)), Map.entry("L/min", new Unit(1e-3 / 60, 0, Dimension.VOLUME_FLOW)));
 
   private Rigs() {}
 
