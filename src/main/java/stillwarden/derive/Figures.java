@@ -110,7 +110,7 @@ final class Figures {
   }
 
   Optional<Duration> coolingTime() {
-    return facts.coolsToHandWarm().map(b -> Duration.ofMillis(Math.round(b.high() * 1000)));
+    return facts.coolsToHandWarm();
   }
 
   /** Until when a weak boil is explained by the last feed. */

@@ -31,6 +31,8 @@ public record Condenser(Band area, Band supply, Optional<Double> flow, String me
     }
     Optional<Double> flow = run.flow().or(() -> part.si("coolant.flow")).map(v -> v * WaterSteam.COLD_DENSITY);
     String medium = medium(part);
+    part.word("coolant.medium").filter(m -> !m.equals("water") && !m.equals("none"))
+        .ifPresent(m -> notes.add("coolant `" + m + "` is computed as water"));
     if (flow.isEmpty() && medium.equals("water")) {
       notes.add("coolant flow not stated: as much as keeps its warming to the limit");
     }

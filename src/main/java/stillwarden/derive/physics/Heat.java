@@ -58,7 +58,7 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
   private static Band setting(Rig rig, RunState run, List<String> notes) {
     Optional<Part> regulator = Roles.regulator(rig);
     Optional<Double> dial = run.setting().filter(s -> s > 0);
-    if (dial.isEmpty() && !run.started()) {
+    if (dial.isEmpty()) {
       dial = regulator.flatMap(r -> r.si("setting")).filter(s -> s > 0);
     }
     if (dial.isEmpty()) {

@@ -42,7 +42,7 @@ public final class Physics {
         b.atmosphere, b.charge.oil(), b.immiscible, BoilingNumbers.hardlyVolatile(b), b.two.map(TwoLiquids::unknown).orElse(List.of()),
         condenser.verdict(), condenser.choice(), condenser.liquidusNow(), condenser.liquidusHighest(), condenser.freezesInTakeOff(),
         b.volume.map(b::minimumLevel), now.flask(), now.reservoir(), now.receiver(), now.collected(), now.leak(),
-        feed.map(Feed::recovered), feed.map(Feed::stopsBoil).orElse(false), now.boilsFrom(), cooling(b, now, Limits.value("hand-warm-max", b.policy)),
+        feed.map(Feed::recovered), feed.map(Feed::stopsBoil).orElse(false), now.boilsFrom(), cooling(b, now, Limits.value("hand-warm-max", b.policy)).map(s -> Duration.ofSeconds((long) s.high())),
         cooling(b, now, b.boiling() - Limits.value("quiet-below-boiling-min", b.policy)), condenser.jacketWarmsIn(),
         WaterBudget.shortage(b), overfull(b), receiver(b), mantle(b), b.charge.foams(), fillLimit(b), b.charge);
   }

@@ -1,5 +1,6 @@
 package stillwarden.derive.physics;
 
+import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
@@ -24,7 +25,7 @@ import java.util.Optional;
  * @param feedRecovery after the last cold feed: until when a weak boil is explained
  * @param feedStopsBoil the last feed was so much that boiling must stop
  * @param boilsFrom when boiling is computed or was seen to begin
- * @param coolsToHandWarm s that a flask left standing takes to hand-warm; the high end is the one to wait for
+ * @param coolsToHandWarm time that a flask left standing takes to hand-warm, at the slow end
  * @param coolsToQuiet s that it takes to fall as far under its boiling point as the site asks before anything is opened
  * @param jacketWarmsIn time in which a full still jacket reaches the oil's freezing temperature, s
  * @param waterBudget what is short and by how much; empty when enough
@@ -55,7 +56,7 @@ public record SideFacts(
     Optional<Instant> feedRecovery,
     boolean feedStopsBoil,
     Optional<Instant> boilsFrom,
-    Optional<Band> coolsToHandWarm,
+    Optional<Duration> coolsToHandWarm,
     Optional<Band> coolsToQuiet,
     Optional<Band> jacketWarmsIn,
     Optional<Shortage> waterBudget,

@@ -13,6 +13,7 @@ final class TimeNumbers {
   private final Optional<BoilUp> rate;
   private final Progress now;
   private final Numbers.Out out;
+  private final List<String> floor = new ArrayList<>();
 
   private TimeNumbers(Bench b, Optional<BoilUp> rate, Progress now, Numbers.Out out) {
     this.b = b;
@@ -29,6 +30,9 @@ final class TimeNumbers {
     t.target();
     t.time("time-to-reservoir-end", now.reservoir(), "reservoir at the rate at which water boils away", "reservoir.water");
     Optional<Double> minimum = b.volume.map(b::minimumLevel);
+    if (b.volume.isPresent() && minimum.get() > Levels.minimum(b.volume.get(), b.flask.flatMap(f -> f.si("minimum-level")), 0)) {
+      t.floor.add("minimum level raised to what covers the solids");
+    }
     t.time("time-to-minimum-level", minimum.flatMap(m -> now.flask().map(f -> f.minus(Band.of(m)).atLeast(0))),
         "flask above its minimum level, nothing fed", "flask.volume", "charge.water");
     t.time("time-to-dryness", now.flask().map(f -> f.minus(b.charge.displaced()).minus(b.charge.uptake()).atLeast(0)),
@@ -125,7 +129,11 @@ final class TimeNumbers {
       Band share = rate.get().cubicMetres().times(name.contains("receiver") || name.contains("target") ? 1 : rate.get().waterShare());
       boolean none = volume.get().high() == 0;
       Band seconds = none ? Band.of(0) : volume.get().over(share).plus(now.heatLeft().get());
-      out.put(name, seconds, what + "; " + method(), SOURCE, notes(b.run.started() ? "from now" : "from heat-on"));
+      List<String> notes = notes(b.run.started() ? "from now" : "from heat-on");
+      if (name.contains("minimum")) {
+        notes.addAll(floor);
+      }
+      out.put(name, seconds, what + "; " + method(), SOURCE, notes);
     }
   }
 }

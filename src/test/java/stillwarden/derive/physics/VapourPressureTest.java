@@ -74,4 +74,22 @@ class VapourPressureTest {
     assertThat(v.formula(175.4 + 273.15)).isLessThan(101_325);
     assertThat(v.formula(177.6 + 273.15)).isGreaterThan(101_325);
   }
+
+  @Test
+  void solventsAtTheTemperaturesOfABench() {
+    for (String[] r : Tables.rows("solvents.csv")) {
+      Substance s = Substances.find(r[0]).orElseThrow();
+      double[] celsius = {20, 25, 35};
+      for (int i = 0; i < celsius.length; i++) {
+        double kilopascal = s.vapourPressure(celsius[i] + 273.15).orElseThrow().pascal() / 1000;
+        assertThat(kilopascal).as("%s at %.0f", r[0], celsius[i]).isCloseTo(Double.parseDouble(r[i + 1]), withPercentage(1));
+      }
+    }
+  }
+
+  @ParameterizedTest
+  @CsvSource({"quinoline, 1.151", "eugenyl acetate, 0.1235", "vanillin, 0.0905"}) // the extrapolated values themselves, from the same equations
+  void extrapolationFollowsTheEquation(String name, double kilopascal) {
+    assertThat(Substances.find(name).orElseThrow().vapourPressure(BOILING).orElseThrow().pascal() / 1000).isCloseTo(kilopascal, withPercentage(0.1));
+  }
 }
