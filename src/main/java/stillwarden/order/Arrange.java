@@ -75,21 +75,10 @@ final class Arrange {
         }
       }
     }
-    return deadliestFirst(out.values());
-  }
-
-  /** By the gravest signal word behind a ban, then by what the deed itself can do ({@code @deadliest} in rules/groups.yaml). */
-  private static Map<String, Bar> deadliestFirst(Collection<Bar> bars) {
-    List<String> rank = Deeds.group("@deadliest");
-    List<Bar> sorted = new ArrayList<>(bars);
-    sorted.sort(Comparator.comparingInt((Bar b) -> -b.reasons().stream().mapToInt(f -> Hazards.signal(f).ordinal()).max().orElse(0))
-        .thenComparingInt(b -> rank.contains(b.deed()) ? rank.indexOf(b.deed()) : rank.size())
-        .thenComparing(Bar::deed));
-    Map<String, Bar> out = new LinkedHashMap<>();
-    sorted.forEach(b -> out.put(b.deed(), b));
     return out;
   }
 
+  /** By the gravest signal word behind a ban, then by what the deed itself can do ({@code @deadliest} in rules/groups.yaml). */
   private static List<Bar> deadliestFirst(Collection<Bar> bars) {
     List<String> deadliest = Deeds.group("@deadliest");
     List<Bar> out = new ArrayList<>(bars);
