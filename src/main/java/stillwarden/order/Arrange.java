@@ -48,12 +48,10 @@ final class Arrange {
   Plan arrange(List<Finding> active) {
     Map<String, Bar> bars = bars(active);
     Map<String, Step> steps = merged(active);
+    // first the bans: a barred deed must not take a weaker one with it; then again, for what waited for the weaker one
+    removeBarred(steps, bars);
     replaceWeaker(steps);
-    boolean again = true;
-    while (again) {
-      // a deed that waits for a barred one is barred too, whichever of them is met first
-      again = steps.values().removeIf(s -> barred(s, bars, steps.values()));
-    }
+    removeBarred(steps, bars);
     Set<Edge> edges = edges(active, bars, steps.values());
     List<String> cycle = new ArrayList<>();
     List<Step> sorted = sort(steps.values(), edges, cycle);
@@ -110,6 +108,14 @@ final class Arrange {
           return falls;
         });
       }
+    }
+  }
+
+  private static void removeBarred(Map<String, Step> steps, Map<String, Bar> bars) {
+    boolean again = true;
+    while (again) {
+      // a deed that waits for a barred one is barred too, whichever of them is met first
+      again = steps.values().removeIf(s -> barred(s, bars, steps.values()));
     }
   }
 
