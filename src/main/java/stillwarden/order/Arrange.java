@@ -28,12 +28,26 @@ final class Arrange {
    */
   record Plan(List<Step> steps, List<Bar> bans, List<String> cycle) {}
 
-  /** A deed that must not be done, or not before something. */
-  record Bar(String deed, String until, boolean named, List<Finding> reasons) {
-    /** A plain ban is stronger than one with {@code until}; what a rule named is told, what only a group brought is not. */
+  /**
+   * A deed that must not be done, or not before something.
+   *
+   * @param untils everything it waits for; empty: never
+   */
+  record Bar(String deed, Set<String> untils, boolean named, List<Finding> reasons) {
+    /** A plain ban is stronger than one that waits, and of several waits each counts; what a rule named is told, what only a group brought is not. */
     Bar with(Bar other) {
-      String both = until.isEmpty() || other.until.isEmpty() ? "" : until;
-      return new Bar(deed, both, named || other.named, joined(reasons, other.reasons));
+      Set<String> both = new TreeSet<>(untils);
+      both.addAll(other.untils);
+      return new Bar(deed, plain() || other.plain() ? Set.of() : both, named || other.named, joined(reasons, other.reasons));
+    }
+
+    boolean plain() {
+      return untils.isEmpty();
+    }
+
+    /** The one that is told. */
+    String until() {
+      return untils.stream().findFirst().orElse("");
     }
   }
 
@@ -63,7 +77,7 @@ final class Arrange {
     for (Finding f : active) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Forbid ban) {
-          Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until(), ban.deed().equals(deed), List.of(f)), Bar::with));
+          Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until().isEmpty() ? Set.of() : Set.of(ban.until()), ban.deed().equals(deed), List.of(f)), Bar::with));
         }
       }
     }
@@ -124,15 +138,17 @@ final class Arrange {
     if (bar == null) {
       return false;
     }
-    if (bar.until().isEmpty()) {
+    if (bar.plain()) {
       return true;
     }
-    boolean action = Deeds.ids().contains(bar.until());
-    if (!action) {
-      s.iff = bar.until();
-      return false;
+    for (String until : bar.untils()) {
+      if (!Deeds.ids().contains(until)) {
+        s.iff = until;
+      } else if (all.stream().noneMatch(o -> o.id().equals(until))) {
+        return true;
+      }
     }
-    return all.stream().noneMatch(o -> o.id().equals(bar.until()));
+    return false;
   }
 
   private record Edge(Step first, Step then) {}
@@ -150,9 +166,7 @@ final class Arrange {
       }
     }
     for (Bar bar : bars.values()) {
-      if (!bar.until().isEmpty()) {
-        link(steps, bar.until(), bar.deed(), out);
-      }
+      bar.untils().forEach(until -> link(steps, until, bar.deed(), out));
     }
     return out;
   }

@@ -143,7 +143,8 @@ class StateRelationTest {
         List<Finding> all = active(judge, s);
         Plan plan = Arranged.of(all, setup);
         for (Finding f : all) {
-          boolean proposes = f.statements().stream().anyMatch(x -> x instanceof Statement.Propose);
+          // a principle that modifies another's advice leaves the deeds to it
+          boolean proposes = f.under().isEmpty() && f.statements().stream().anyMatch(x -> x instanceof Statement.Propose);
           if (Arranged.signal(f).equals("DANGER") && proposes && (setup || !Arranged.gate(f)) && plan.steps().stream().noneMatch(x -> x.reasons().contains(f))) {
             problem("nothing left for " + f.hazard() + ": " + f.rule(), s.odd() + " " + plan.ids());
           }
