@@ -206,9 +206,9 @@ final class Answer {
     return who.isEmpty() ? cited : cited + " (" + who + ")";
   }
 
-  private List<Advice.Ban> bans(List<Arrange.Bar> bars) {
+  private List<Advice.Ban> bans(List<Bans.Bar> bars) {
     List<Advice.Ban> out = new ArrayList<>();
-    for (Arrange.Bar b : bars) {
+    for (Bans.Bar b : bars) {
       if ((everything || out.size() < MOST_BANS) && b.named()) {
         Set<String> why = new TreeSet<>();
         b.reasons().forEach(f -> why.add(f.rule()));

@@ -11,6 +11,7 @@ public final class Arranged {
   /** One step; {@code iff} as in the answer. */
   public record Row(String id, String part, String iff, String signal, List<Finding> reasons) {}
 
+  /** One ban; a deed that waits for two things has two. */
   public record Bar(String deed, String until, List<Finding> reasons) {}
 
   public record Plan(List<Row> steps, List<Bar> bars, List<String> cycle) {
@@ -27,7 +28,7 @@ public final class Arranged {
     Arrange.Plan plan = new Arrange(s -> Double.MAX_VALUE, s -> 0, false).arrange(acted);
     List<Row> rows = new ArrayList<>();
     plan.steps().forEach(s -> rows.add(new Row(s.id(), s.part, s.iff, s.signal().name(), List.copyOf(s.reasons))));
-    List<Bar> bars = plan.bans().stream().map(b -> new Bar(b.deed(), b.until(), b.reasons())).toList();
+    List<Bar> bars = plan.bans().stream().flatMap(b -> (b.plain() ? java.util.stream.Stream.of("") : b.untils().stream()).map(u -> new Bar(b.deed(), u, b.reasons()))).toList();
     return new Plan(rows, bars, plan.cycle());
   }
 

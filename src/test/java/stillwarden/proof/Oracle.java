@@ -63,6 +63,7 @@ final class Oracle {
     o.noColdLiquidOnHotGlass();
     o.lastOpening();
     o.tipBeforeCooling();
+    o.heatDoesNotWait();
     o.nothingIntoHotLiquid();
     o.heatIsNotRaised();
     o.possibleMoves();
@@ -117,9 +118,10 @@ final class Oracle {
     left.removeIf(d -> CUTS.contains(d) && s.is("heater-kind", "burner") || d.equals("support-load"));
     // a flask that cracks wets its heater (correction 25: heater wet and live)
     boolean sash = s.is("pressure-evident", "yes") || fire() || s.is("toxic-release", "yes") || s.is("heater-live-wet", "yes") || s.is("heater-lowers", "no")
-        || s.is("heater-kind", "burner") || s.is("glass-failing", "yes") || bathWet() || s.is("heater-wet", "oil", "solvent");
+        || s.is("heater-kind", "burner") || s.is("glass-failing", "yes") || bathWet();
+    boolean either = s.is("heater-wet", "oil", "solvent");
     String second = left.isEmpty() ? "" : left.get(0);
-    require(sash ? second.equals("sash-down") : second.equals("lower-heat"), "INV-01 second is " + second + ", wanted " + (sash ? "sash-down" : "lower-heat"));
+    require(second.equals(sash ? "sash-down" : "lower-heat") || either && Set.of("sash-down", "lower-heat").contains(second), "INV-01 second is " + second + ", wanted " + (sash ? "sash-down" : "lower-heat"));
   }
 
   private boolean bathWet() {
@@ -143,7 +145,8 @@ final class Oracle {
       require(!ids.contains("feed-slow"), "INV-04 feed-slow into a hot dry flask");
     }
     if (s.is("glass-hot", "yes") && s.is("jacket", "empty-hot")) {
-      for (String deed : List.of("coolant-start-slow", "coolant-raise", "coolant-warm", "coolant-keep")) {
+      // tempered water onto a jacket that was held off by plan is what correction 24 ends with
+      for (String deed : List.of("coolant-start-slow", "coolant-raise", "coolant-keep")) {
         require(!ids.contains(deed) || behindAWait(deed) || deed.equals("coolant-keep") && s.is("coolant", "running", "low"), "INV-04 " + deed + " into a hot empty jacket");
       }
     }
@@ -163,6 +166,14 @@ final class Oracle {
     if (s.live() && s.is("tip", "under-liquid") && s.is("path", "open") && !excepted) {
       require(inOrder("lower-receiver", "lower-heat"), "INV-06 lower-heat before the tip is clear");
       require(inOrder("lower-receiver", "wait-quiet"), "INV-06 wait-quiet before the tip is clear");
+    }
+  }
+
+  /** Whatever the tip does: stored heat does not wait until it is quiet, since it is what keeps it from being quiet. */
+  private void heatDoesNotWait() {
+    boolean until = bars.stream().anyMatch(b -> b.deed().equals("lower-heat") && WAITS.contains(b.until()));
+    if (s.live() && !until) {
+      require(!behindAWait("lower-heat") || !ids.contains("lower-heat") || s.is("attendance", "nobody"), "INV-06 lower-heat behind the wait for quiet");
     }
   }
 

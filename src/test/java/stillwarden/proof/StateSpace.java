@@ -47,20 +47,20 @@ final class StateSpace {
 
   /** A full state near the last one: two in three keep most of their words, which costs the engine less. */
   State step(State last, SplittableRandom r) {
-    if (last == null || r.nextInt(12) == 0) {
+    if (last == null || r.nextInt(40) == 0) {
       return draw(r);
     }
     Rule rule = rules.get(r.nextInt(rules.size()));
     Map<String, String> wanted = r.nextInt(3) > 0 ? wanted(rule, r) : Map.of();
     double odd = new double[] {0.05, 0.15, 0.4}[r.nextInt(3)];
     State s = last.copy();
-    if (r.nextInt(3) == 0 || !holds(s, wanted)) {
+    if (r.nextInt(6) == 0 || !holds(s, wanted)) {
       State c = suiting(r, odd, wanted);
       CORE.forEach(s::absent);
       s.known.putAll(c.known);
     }
     List<String> words = List.copyOf(domains.keySet());
-    for (int i = 0; i < 10; i++) {
+    for (int i = 0; i < 8; i++) {
       String about = words.get(r.nextInt(words.size()));
       if (!CORE.contains(about)) {
         s.absent(about);

@@ -350,7 +350,7 @@ class RulebookTest {
       return;
     }
     String word = String.valueOf(source);
-    boolean known = SOURCES.contains(word.split("[ ,;:(]")[0]) || word.startsWith("common practice") || word.startsWith("proposal") || word.startsWith("from memory") || word.startsWith("site's choice") || word.startsWith("Z9.5");
+    boolean known = SOURCES.contains(word.split("[ ,;:(]")[0]) || word.startsWith("common practice") || word.startsWith("proposal") || word.startsWith("from memory") || word.startsWith("site's choice") || word.startsWith("ANSI-Z9.5");
     wrong(source == null || !known, file + ".yaml: `" + id + "` cites " + source);
   }
 
