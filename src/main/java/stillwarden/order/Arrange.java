@@ -9,6 +9,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.function.ToDoubleFunction;
 import java.util.function.ToIntFunction;
@@ -30,6 +31,10 @@ final class Arrange {
 
   /** A deed that must not be done, or not before something. */
   record Bar(String deed, String until, boolean named, List<Finding> reasons) {
+    Signal signal() {
+      return reasons.stream().map(Hazards::signal).reduce(Signal.NOTICE, Signal::worse);
+    }
+
     /** A plain ban is stronger than one with {@code until}; what a rule named is told, what only a group brought is not. */
     Bar with(Bar other) {
       String both = until.isEmpty() || other.until.isEmpty() ? "" : until;
@@ -40,24 +45,29 @@ final class Arrange {
   private final ToDoubleFunction<Step> timeToHarm;
   private final ToIntFunction<Step> walkRound;
 
-  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound) {
+  private final boolean walking;
+
+  /** @param walking an inspection: in walk-round order, for nothing is hot yet */
+  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound, boolean walking) {
     this.timeToHarm = timeToHarm;
     this.walkRound = walkRound;
+    this.walking = walking;
   }
 
   Plan arrange(List<Finding> active) {
-    Map<String, Bar> bars = bars(active);
     Map<String, Step> steps = merged(active);
     replaceWeaker(steps);
-    steps.values().removeIf(s -> barred(s, bars, steps.values()));
+    Map<String, Bar> bars = bars(active);
+    barWaitingForTheImpossible(bars, steps.values());
+    bar(steps, bars);
     Set<Edge> edges = edges(active, bars, steps.values());
     List<String> cycle = new ArrayList<>();
     List<Step> sorted = sort(steps.values(), edges, cycle);
-    return new Plan(placePeople(sorted, edges), List.copyOf(bars.values()), cycle);
+    return new Plan(placePeople(sorted, edges), deadliestFirst(bars.values()), cycle);
   }
 
   private static Map<String, Bar> bars(List<Finding> active) {
-    Map<String, Bar> out = new LinkedHashMap<>();
+    Map<String, Bar> out = new TreeMap<>();
     for (Finding f : active) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Forbid ban) {
@@ -66,6 +76,49 @@ final class Arrange {
       }
     }
     return out;
+  }
+
+  /** By the gravest signal word behind a ban, then by what the deed itself can do ({@code @deadliest} in rules/groups.yaml). */
+  private static List<Bar> deadliestFirst(Collection<Bar> bars) {
+    List<String> deadliest = Deeds.group("@deadliest");
+    List<Bar> out = new ArrayList<>(bars);
+    out.sort(Comparator.comparing(Bar::signal).reversed()
+        .thenComparingInt(b -> deadliest.contains(b.deed()) ? deadliest.indexOf(b.deed()) : deadliest.size())
+        .thenComparing(Bar::deed));
+    return out;
+  }
+
+  /**
+   * A ban that waits for a deed which cannot be done here waits for what stands in for that deed; so the deed behind it is
+   * not lost: a refill behind a heater that cannot move waits until it is quiet, and a sash waits for nothing.
+   */
+  private static void barWaitingForTheImpossible(Map<String, Bar> bars, Collection<Step> steps) {
+    bars.values().removeIf(b -> inVain(b, bars, steps) && Deeds.ids().contains(b.deed()) && Deeds.of(b.deed()).neverLost());
+    bars.replaceAll((deed, bar) -> inVain(bar, bars, steps) ? waitingForAnother(bar, bars, steps) : bar);
+  }
+
+  private static boolean inVain(Bar bar, Map<String, Bar> bars, Collection<Step> steps) {
+    return Deeds.ids().contains(bar.until()) && !possible(bar.until(), bars, steps);
+  }
+
+  private static Bar waitingForAnother(Bar bar, Map<String, Bar> bars, Collection<Step> steps) {
+    return Deeds.of(bar.until()).orElse().stream().filter(d -> possible(d, bars, steps)).findFirst()
+        .map(d -> new Bar(bar.deed(), d, bar.named(), bar.reasons())).orElse(bar);
+  }
+
+  private static boolean possible(String deed, Map<String, Bar> bars, Collection<Step> steps) {
+    boolean never = bars.containsKey(deed) && bars.get(deed).until().isEmpty();
+    return !never && steps.stream().anyMatch(s -> s.id().equals(deed));
+  }
+
+  /** Until nothing more falls: a deed that waits for a barred one is barred too. */
+  private static void bar(Map<String, Step> steps, Map<String, Bar> bars) {
+    int before;
+    do {
+      before = steps.size();
+      List<Step> now = List.copyOf(steps.values());
+      steps.values().removeIf(s -> barred(s, bars, now));
+    } while (steps.size() < before);
   }
 
   private static List<Finding> joined(List<Finding> a, List<Finding> b) {
@@ -162,6 +215,14 @@ final class Arrange {
   }
 
   private Comparator<Step> byLadder() {
+    if (walking) {
+      return Comparator.<Step>comparingInt(s -> s.id().equals("do-not-start") ? 0 : 1)
+          .thenComparingInt(walkRound)
+          .thenComparingDouble(s -> s.deed.ladder())
+          .thenComparing(Step::id)
+          .thenComparing(s -> s.part)
+          .thenComparing(s -> s.variants.toString());
+    }
     return Comparator.<Step>comparingDouble(s -> s.iff.isEmpty() ? s.deed.ladder() : 8.5 + s.deed.ladder() / 100)
         .thenComparingDouble(timeToHarm)
         .thenComparingInt(walkRound)
@@ -210,12 +271,17 @@ final class Arrange {
     List<Step> rest = new ArrayList<>(sorted);
     rest.removeAll(aside);
     List<Step> equipment = rest.stream().filter(s -> s.deed.equipment()).toList();
-    if (aside.isEmpty() || equipment.isEmpty() || !equipment.get(0).deed.cut()) {
+    if (aside.isEmpty() || equipment.isEmpty() || !firstMove(equipment.get(0))) {
       return sorted;
     }
     int keep = equipment.size() > 2 && equipment.get(2).id().equals("sash-down") ? 3 : Math.min(2, equipment.size());
     int place = rest.indexOf(equipment.get(keep - 1)) + 1;
     rest.addAll(place, aside);
     return rest;
+  }
+
+  /** An energy cut, or flames put out before it. */
+  private static boolean firstMove(Step s) {
+    return s.deed.cut() || s.id().equals("flame-out");
   }
 }
