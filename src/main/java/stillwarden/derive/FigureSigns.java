@@ -26,8 +26,6 @@ final class FigureSigns {
     boolean known = scene.rig().datum("place.elevation").isPresent() || scene.rig().datum("place.barometer").isPresent() || scene.run().lastSaw("barometer").isPresent();
     if (known) {
       out.seen("pressure-known", "yes", "pressure of the place by barometer or elevation");
-    } else if (scene.time().heatOn().isEmpty()) {
-      out.possible("pressure-known", "neither barometer nor elevation stated", "place.elevation");
     } else {
       out.seen("pressure-known", "", "no", "neither barometer nor elevation stated", null, "place.elevation");
     }
