@@ -199,8 +199,11 @@ final class Answer {
     return "";
   }
 
-  private static String sourceWords(String id) {
-    return Knowledge.section("sources").get(id.split(" ", 2)[0]).text("short").orElse(id);
+  /** {@code NICKELS (Nickels, Analytical Chemistry, October 1949)}: the id, and who that is. */
+  private static String sourceWords(String cited) {
+    String id = cited.split(" ", 2)[0];
+    String who = Knowledge.section("sources").get(id).text("ref").orElse("").split("[:;(]", 2)[0].strip();
+    return who.isEmpty() ? cited : cited + " (" + who + ")";
   }
 
   private List<Advice.Ban> bans(List<Arrange.Bar> bars) {

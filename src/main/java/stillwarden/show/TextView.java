@@ -118,7 +118,7 @@ public final class TextView {
   private void reason(Advice.Because b, String orders) {
     page.item("  - ", "(" + orders + ") " + b.rule() + " [" + b.hazard() + "]");
     b.facts().forEach(f -> page.item("      ", f));
-    page.item("      ", "source: " + b.source());
+    page.item("      ", "source: " + b.source().replaceAll(" \\([^)]*\\)", ""));
   }
 
   private void sources() {
