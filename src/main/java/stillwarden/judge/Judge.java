@@ -32,7 +32,7 @@ public final class Judge implements AutoCloseable {
   private final Set<String> broken = new HashSet<>();
   private KieSession session;
 
-  private Judge(RuleBase rules, boolean recalls) {
+  Judge(RuleBase rules, boolean recalls) {
     this.rules = rules;
     this.recalls = recalls;
   }

@@ -6,6 +6,7 @@ import java.time.ZoneOffset;
 import java.time.format.DateTimeParseException;
 import java.util.Comparator;
 import java.util.Optional;
+import stillwarden.derive.Ground;
 import stillwarden.derive.Situation;
 import stillwarden.describe.Entry;
 import stillwarden.describe.Policy;
@@ -31,7 +32,9 @@ public final class Advisor {
 
   /** @param at the moment to judge; later lines are left out; else the latest time in the log */
   public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at) {
-    return advise(rig, policy, log, at, Judge.forRuns(), true);
+    try (Judge judge = Judge.forRuns()) {
+      return advise(new Ground(rig, policy), log, at, judge);
+    }
   }
 
   /** The same without a cap on steps, bans and questions: for those who check, not for those who act. */
@@ -43,14 +46,11 @@ public final class Advisor {
     }
   }
 
-  /** With a judge that is kept for a live run: only the signs that came or went are handed to the engine. */
-  public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at, Judge judge, boolean closeJudge) {
+  /** With what is kept for a live run: only the signs that came or went are handed to the engine. */
+  public static Advice advise(Ground ground, RunLog log, Optional<OffsetDateTime> at, Judge judge) {
     OffsetDateTime when = at.orElseGet(() -> latest(log));
-    Situation s = situation(rig, policy, log, when);
+    Situation s = Situation.run(ground, log.entries(), when.toInstant(), when.getOffset());
     Judgement j = judge.judge(SetupFaults.with(s, judge.judge(s.signs())));
-    if (closeJudge) {
-      judge.close();
-    }
     return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(log.leftOut());
   }
 

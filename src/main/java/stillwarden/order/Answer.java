@@ -220,12 +220,6 @@ final class Answer {
 
   /** Everything that a set-up rule can look at on this rig; or of it what is unknown. */
   private Set<String> gateItems(boolean unknownOnly) {
-    Set<String> named = new TreeSet<>();
-    Knowledge.section("hazards").fields().forEach((id, t) -> {
-      if (t.text("urgency").filter("before-start"::equals).isPresent()) {
-        t.get("rules").items().forEach(r -> named.addAll(r.words("signs")));
-      }
-    });
     Set<String> unknown = new TreeSet<>();
     findings.stream().filter(f -> !f.isActive() && Verdicts.holdsStart(f))
         .forEach(f -> f.facts().stream().filter(x -> x.standing() == Standing.POSSIBLE).forEach(x -> unknown.add(x.about() + " " + x.part())));
@@ -233,7 +227,7 @@ final class Answer {
       return unknown;
     }
     Set<String> out = new TreeSet<>(unknown);
-    situation.signs().stream().filter(x -> x.isSeen() && named.contains(x.about())).forEach(x -> out.add(x.about() + " " + x.part()));
+    situation.signs().stream().filter(x -> x.isSeen() && Hazards.gateSigns().contains(x.about())).forEach(x -> out.add(x.about() + " " + x.part()));
     return out;
   }
 

@@ -6,6 +6,7 @@ import java.util.Collections;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import stillwarden.derive.Ground;
 import stillwarden.describe.Entry;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Rig;
@@ -20,8 +21,7 @@ import stillwarden.order.Advisor;
  * memory.
  */
 public final class Watch implements AutoCloseable {
-  private final Rig rig;
-  private final Policy policy;
+  private final Ground ground;
   private final Judge judge;
   private final List<Entry> entries = new ArrayList<>();
   private List<RunLog.LeftOut> leftOut = List.of();
@@ -32,8 +32,7 @@ public final class Watch implements AutoCloseable {
 
   /** @param judge closed with the watch */
   public Watch(Rig rig, Policy policy, Judge judge) {
-    this.rig = rig;
-    this.policy = policy;
+    this.ground = new Ground(rig, policy);
     this.judge = judge;
   }
 
@@ -57,7 +56,7 @@ public final class Watch implements AutoCloseable {
 
   private Advice now(Optional<OffsetDateTime> at) {
     RunLog log = new RunLog("", Map.of(), Collections.unmodifiableList(entries), leftOut);
-    return Advisor.advise(rig, policy, log, at, judge, false);
+    return Advisor.advise(ground, log, at, judge);
   }
 
   @Override
