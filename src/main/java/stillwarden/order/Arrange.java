@@ -6,6 +6,7 @@ import java.util.Comparator;
 import java.util.HashMap;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -108,19 +109,25 @@ final class Arrange {
     return out;
   }
 
+  /** Weaker deeds fall away; why they were wanted counts for whatever outdoes them, however long the chain. */
   private static void replaceWeaker(Map<String, Step> steps) {
-    Set<String> present = new TreeSet<>();
-    steps.values().forEach(s -> present.add(s.id()));
-    for (Step strong : List.copyOf(steps.values())) {
-      for (String weak : strong.deed.replaces()) {
-        // what is itself replaced by something stronger still does its own replacing: the relation is transitive
-        steps.values().removeIf(s -> {
-          boolean falls = s.id().equals(weak) && s != strong;
-          if (falls) {
-            strong.reasons.addAll(s.reasons);
-          }
-          return falls;
-        });
+    Map<Step, List<Finding>> own = new HashMap<>();
+    steps.values().forEach(s -> own.put(s, List.copyOf(s.reasons)));
+    Set<Step> fallen = new HashSet<>();
+    for (Step strong : steps.values()) {
+      Set<Step> weaker = new LinkedHashSet<>();
+      outdone(strong, steps.values(), weaker);
+      weaker.remove(strong);
+      weaker.forEach(w -> strong.reasons.addAll(own.get(w)));
+      fallen.addAll(weaker);
+    }
+    steps.values().removeAll(fallen);
+  }
+
+  private static void outdone(Step strong, Collection<Step> all, Set<Step> out) {
+    for (Step s : all) {
+      if (strong.deed.replaces().contains(s.id()) && out.add(s)) {
+        outdone(s, all, out);
       }
     }
   }
