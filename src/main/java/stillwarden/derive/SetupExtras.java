@@ -76,8 +76,15 @@ final class SetupExtras {
     } else if (fed || regulator) {
       out.seen("heater-controlled", name, "yes", name + " is fed through a regulator, by the rig file", null, look);
     } else {
-      out.possible("heater-controlled", name, SignSet.domain("heater-controlled"), look + " is not stated", List.of(look));
+      out.possible("heater-controlled", name, SignSet.domain("heater-controlled"), "what feeds " + name + " is not stated", List.of(regulatorLook(look)));
     }
+  }
+
+  /** Whether there is a regulator, then what it feeds, then what the heater is fed from. */
+  private String regulatorLook(String fedFrom) {
+    boolean none = scene.roles().all(Role.REGULATOR).isEmpty();
+    boolean open = none && !scene.roles().absent().contains(Role.REGULATOR) && !scene.rig().nothingElse();
+    return open ? RigSigns.usualName(Role.REGULATOR) + ".kind" : none ? fedFrom : scene.roles().all(Role.REGULATOR).get(0).name() + ".feeds";
   }
 
   private void charge() {

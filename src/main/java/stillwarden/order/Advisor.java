@@ -23,7 +23,8 @@ public final class Advisor {
   /** @param at the moment of the inspection; else the rig's {@code seen.at}, else none: then nothing dated is in force */
   public static Advice inspect(Rig rig, Policy policy, Optional<OffsetDateTime> at) {
     Optional<OffsetDateTime> when = at.or(() -> rig.word("seen.at").flatMap(Advisor::time));
-    Situation s = Situation.inspection(rig, policy, when.map(OffsetDateTime::toInstant), when.map(OffsetDateTime::getOffset).orElse(ZoneOffset.UTC));
+    Policy inForce = policy.asOf(when.map(OffsetDateTime::toInstant));
+    Situation s = Situation.inspection(rig, inForce, when.map(OffsetDateTime::toInstant), when.map(OffsetDateTime::getOffset).orElse(ZoneOffset.UTC));
     Judgement j = Judge.once(Judge.forInspection(), s.signs());
     return new Answer(s, j, when, true).advice(java.util.List.of());
   }
@@ -65,7 +66,7 @@ public final class Advisor {
 
   /** The facts of a run at one moment, for those who judge by other means (tests, audits). */
   public static Situation situation(Rig rig, Policy policy, RunLog log, OffsetDateTime when) {
-    return Situation.run(rig, policy, log.entries(), when.toInstant(), when.getOffset());
+    return Situation.run(rig, policy.asOf(Optional.of(when.toInstant())), log.entries(), when.toInstant(), when.getOffset());
   }
 
   private static OffsetDateTime latest(RunLog log) {

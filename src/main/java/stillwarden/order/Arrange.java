@@ -10,6 +10,7 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.function.ToDoubleFunction;
 import java.util.function.ToIntFunction;
@@ -35,13 +36,6 @@ final class Arrange {
    * @param untils everything it waits for; empty: never
    */
   record Bar(String deed, Set<String> untils, boolean named, List<Finding> reasons) {
-    /** A plain ban is stronger than one that waits, and of several waits each counts; what a rule named is told, what only a group brought is not. */
-    Bar with(Bar other) {
-      Set<String> both = new TreeSet<>(untils);
-      both.addAll(other.untils);
-      return new Bar(deed, plain() || other.plain() ? Set.of() : both, named || other.named, joined(reasons, other.reasons));
-    }
-
     boolean plain() {
       return untils.isEmpty();
     }
@@ -50,31 +44,52 @@ final class Arrange {
     String until() {
       return untils.stream().findFirst().orElse("");
     }
+
+    Bar waitingFor(Set<String> others) {
+      return new Bar(deed, others, named, reasons);
+    }
+
+    Signal signal() {
+      return reasons.stream().map(Hazards::signal).reduce(Signal.NOTICE, Signal::worse);
+    }
+
+    /** A plain ban is stronger than one that waits, and of several waits each counts; what a rule named is told, what only a group brought is not. */
+    Bar with(Bar other) {
+      Set<String> both = new TreeSet<>(untils);
+      both.addAll(other.untils);
+      return new Bar(deed, plain() || other.plain() ? Set.of() : both, named || other.named, joined(reasons, other.reasons));
+    }
   }
 
   private final ToDoubleFunction<Step> timeToHarm;
   private final ToIntFunction<Step> walkRound;
 
-  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound) {
+  private final boolean walking;
+
+  /** @param walking an inspection: in walk-round order, for nothing is hot yet */
+  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound, boolean walking) {
     this.timeToHarm = timeToHarm;
     this.walkRound = walkRound;
+    this.walking = walking;
   }
 
   Plan arrange(List<Finding> active) {
-    Map<String, Bar> bars = bars(active);
     Map<String, Step> steps = merged(active);
+    Map<String, Bar> bars = bars(active);
     // first the bans: a barred deed must not take a weaker one with it; then again, for what waited for the weaker one
-    removeBarred(steps, bars);
+    barWaitingForTheImpossible(bars, steps.values());
+    bar(steps, bars);
     replaceWeaker(steps);
-    removeBarred(steps, bars);
+    barWaitingForTheImpossible(bars, steps.values());
+    bar(steps, bars);
     Set<Edge> edges = edges(active, bars, steps.values());
     List<String> cycle = new ArrayList<>();
     List<Step> sorted = sort(steps.values(), edges, cycle);
-    return new Plan(placePeople(sorted, edges), List.copyOf(bars.values()), cycle);
+    return new Plan(placePeople(sorted, edges), deadliestFirst(bars.values()), cycle);
   }
 
   private static Map<String, Bar> bars(List<Finding> active) {
-    Map<String, Bar> out = new LinkedHashMap<>();
+    Map<String, Bar> out = new TreeMap<>();
     for (Finding f : active) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Forbid ban) {
@@ -83,6 +98,60 @@ final class Arrange {
       }
     }
     return out;
+  }
+
+  /** By the gravest signal word behind a ban, then by what the deed itself can do ({@code @deadliest} in rules/groups.yaml). */
+  private static List<Bar> deadliestFirst(Collection<Bar> bars) {
+    List<String> deadliest = Deeds.group("@deadliest");
+    List<Bar> out = new ArrayList<>(bars);
+    out.sort(Comparator.comparing(Bar::signal).reversed()
+        .thenComparingInt(b -> deadliest.contains(b.deed()) ? deadliest.indexOf(b.deed()) : deadliest.size())
+        .thenComparing(Bar::deed));
+    return out;
+  }
+
+  /**
+   * A ban that waits for a deed which cannot be done here waits for what stands in for that deed; so the deed behind it is
+   * not lost: a refill behind a heater that cannot move waits until it is quiet, and a sash waits for nothing.
+   */
+  private static void barWaitingForTheImpossible(Map<String, Bar> bars, Collection<Step> steps) {
+    bars.values().removeIf(b -> neverLost(b) && !b.plain() && b.untils().stream().allMatch(u -> inVain(u, bars, steps)));
+    bars.replaceAll((deed, bar) -> bar.plain() ? bar : bar.waitingFor(waits(bar, bars, steps)));
+  }
+
+  private static boolean neverLost(Bar bar) {
+    return Deeds.ids().contains(bar.deed()) && Deeds.of(bar.deed()).neverLost();
+  }
+
+  private static boolean inVain(String until, Map<String, Bar> bars, Collection<Step> steps) {
+    return Deeds.ids().contains(until) && !possible(until, bars, steps);
+  }
+
+  private static Set<String> waits(Bar bar, Map<String, Bar> bars, Collection<Step> steps) {
+    Set<String> out = new TreeSet<>();
+    for (String until : bar.untils()) {
+      if (!inVain(until, bars, steps)) {
+        out.add(until);
+      } else if (!neverLost(bar)) {
+        out.add(Deeds.of(until).orElse().stream().filter(d -> possible(d, bars, steps)).findFirst().orElse(until));
+      }
+    }
+    return out;
+  }
+
+  private static boolean possible(String deed, Map<String, Bar> bars, Collection<Step> steps) {
+    boolean never = bars.containsKey(deed) && bars.get(deed).plain();
+    return !never && steps.stream().anyMatch(s -> s.id().equals(deed));
+  }
+
+  /** Until nothing more falls: a deed that waits for a barred one is barred too. */
+  private static void bar(Map<String, Step> steps, Map<String, Bar> bars) {
+    int before;
+    do {
+      before = steps.size();
+      List<Step> now = List.copyOf(steps.values());
+      steps.values().removeIf(s -> barred(s, bars, now));
+    } while (steps.size() < before);
   }
 
   private static List<Finding> joined(List<Finding> a, List<Finding> b) {
@@ -129,14 +198,6 @@ final class Arrange {
       if (strong.deed.replaces().contains(s.id()) && out.add(s)) {
         outdone(s, all, out);
       }
-    }
-  }
-
-  private static void removeBarred(Map<String, Step> steps, Map<String, Bar> bars) {
-    boolean again = true;
-    while (again) {
-      // a deed that waits for a barred one is barred too, whichever of them is met first
-      again = steps.values().removeIf(s -> barred(s, bars, steps.values()));
     }
   }
 
@@ -193,6 +254,14 @@ final class Arrange {
   }
 
   private Comparator<Step> byLadder() {
+    if (walking) {
+      return Comparator.<Step>comparingInt(s -> s.id().equals("do-not-start") ? 0 : 1)
+          .thenComparingInt(walkRound)
+          .thenComparingDouble(s -> s.deed.ladder())
+          .thenComparing(Step::id)
+          .thenComparing(s -> s.part)
+          .thenComparing(s -> s.variants.toString());
+    }
     return Comparator.<Step>comparingDouble(s -> s.iff.isEmpty() ? s.deed.ladder() : 8.5 + s.deed.ladder() / 100)
         .thenComparingDouble(timeToHarm)
         .thenComparingInt(walkRound)
@@ -241,12 +310,17 @@ final class Arrange {
     List<Step> rest = new ArrayList<>(sorted);
     rest.removeAll(aside);
     List<Step> equipment = rest.stream().filter(s -> s.deed.equipment()).toList();
-    if (aside.isEmpty() || equipment.isEmpty() || !equipment.get(0).deed.cut()) {
+    if (aside.isEmpty() || equipment.isEmpty() || !firstMove(equipment.get(0))) {
       return sorted;
     }
     int keep = equipment.size() > 2 && equipment.get(2).id().equals("sash-down") ? 3 : Math.min(2, equipment.size());
     int place = rest.indexOf(equipment.get(keep - 1)) + 1;
     rest.addAll(place, aside);
     return rest;
+  }
+
+  /** An energy cut, or flames put out before it. */
+  private static boolean firstMove(Step s) {
+    return s.deed.cut() || s.id().equals("flame-out");
   }
 }

@@ -25,7 +25,7 @@ public final class Arranged {
   /** Exactly what the answer arranges: active findings, and of what only holds a start nothing but its bans once heat is on. */
   public static Plan of(Collection<Finding> findings, boolean setup) {
     List<Finding> acted = findings.stream().filter(Finding::isActive).map(f -> setup || !Verdicts.gate(f) ? f : f.bansOnly()).toList();
-    Arrange.Plan plan = new Arrange(s -> Double.MAX_VALUE, s -> 0).arrange(acted);
+    Arrange.Plan plan = new Arrange(s -> Double.MAX_VALUE, s -> 0, false).arrange(acted);
     List<Row> rows = new ArrayList<>();
     plan.steps().forEach(s -> rows.add(new Row(s.id(), s.part, s.iff, s.signal().name(), List.copyOf(s.reasons))));
     List<Bar> bars = plan.bans().stream().flatMap(b -> (b.plain() ? java.util.stream.Stream.of("") : b.untils().stream()).map(u -> new Bar(b.deed(), u, b.reasons()))).toList();
