@@ -51,6 +51,27 @@ class MetamorphicTest {
     return lines.subList(Math.min(lines.size(), 67), lines.size()).toString();
   }
 
+  /** M1, and the same bytes twice. */
+  @Test
+  void linesOfOneMomentMayComeInAnyOrder() throws Exception {
+    Rig rig = Runs.good();
+    SplittableRandom r = new SplittableRandom(SEED);
+    for (int i = 0; i < RUNS; i++) {
+      List<Line> lines = Runs.draw(r, true);
+      List<Line> other = new ArrayList<>(lines);
+      Collections.shuffle(other, new Random(r.nextLong()));
+      other.sort(java.util.Comparator.comparing(Line::at));
+      String one = JsonView.of(Runs.whole(rig, lines, Runs.last(lines)));
+      assertThat(JsonView.of(Runs.whole(rig, lines, Runs.last(lines)))).isEqualTo(one);
+      String two = JsonView.of(Runs.whole(rig, other, Runs.last(lines)));
+      if (!one.equals(two)) {
+        problem("another order, another answer", tail(lines) + " gives " + Runs.ids(Runs.whole(rig, lines, Runs.last(lines))) + "; " + tail(other) + " gives " + Runs.ids(Runs.whole(rig, other, Runs.last(lines)))
+            + " first difference at " + difference(one, two));
+      }
+    }
+    none();
+  }
+
   private static String difference(String a, String b) {
     int i = 0;
     while (i < Math.min(a.length(), b.length()) && a.charAt(i) == b.charAt(i)) {
@@ -92,6 +113,26 @@ class MetamorphicTest {
 
   private static String told(Advice a) {
     return a.verdict() + a.actions().stream().map(x -> x.act() + "/" + x.signal() + x.because().stream().map(Advice.Because::hazard).distinct().toList()).toList();
+  }
+
+  /** "Not sure" after an alarm is no look that clears it; nor is the same thing told of no part. */
+  @Test
+  void doubtAfterAnAlarmCalmsNothing() throws Exception {
+    Rig rig = Runs.good();
+    SplittableRandom r = new SplittableRandom(SEED + 7);
+    for (int i = 0; i < RUNS; i++) {
+      List<Line> lines = Runs.draw(r, false);
+      Advice before = Runs.whole(rig, lines, Runs.last(lines));
+      for (int k = Math.max(67, 0); k < lines.size(); k++) {
+        Line l = lines.get(k);
+        if (l.verb().equals("saw") && !Runs.values(l.id()).isEmpty() && !l.value().equals(Runs.values(l.id()).get(0))) {
+          List<Line> doubt = new ArrayList<>(lines);
+          doubt.add(new Line(Runs.last(lines).plusSeconds(5), "saw", l.id(), "not-sure"));
+          calmer(before, Runs.whole(rig, doubt, Runs.last(doubt)), "then not sure of " + l.id() + " " + l.value(), lines);
+        }
+      }
+    }
+    none();
   }
 
   /** M3 in the rig file: a calm fact that nobody has stated. */

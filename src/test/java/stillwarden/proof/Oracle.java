@@ -63,6 +63,7 @@ final class Oracle {
     o.noColdLiquidOnHotGlass();
     o.lastOpening();
     o.tipBeforeCooling();
+    o.heatDoesNotWait();
     o.nothingIntoHotLiquid();
     o.heatIsNotRaised();
     o.possibleMoves();
@@ -165,6 +166,14 @@ final class Oracle {
     if (s.live() && s.is("tip", "under-liquid") && s.is("path", "open") && !excepted) {
       require(inOrder("lower-receiver", "lower-heat"), "INV-06 lower-heat before the tip is clear");
       require(inOrder("lower-receiver", "wait-quiet"), "INV-06 wait-quiet before the tip is clear");
+    }
+  }
+
+  /** Whatever the tip does: stored heat does not wait until it is quiet, since it is what keeps it from being quiet. */
+  private void heatDoesNotWait() {
+    boolean until = bars.stream().anyMatch(b -> b.deed().equals("lower-heat") && WAITS.contains(b.until()));
+    if (s.live() && !until) {
+      require(!behindAWait("lower-heat") || !ids.contains("lower-heat") || s.is("attendance", "nobody"), "INV-06 lower-heat behind the wait for quiet");
     }
   }
 

@@ -112,6 +112,25 @@ class RulebookTest {
     p.words("clears-within").forEach(d -> wrong(java.time.Duration.parse(d).isNegative(), p.id() + ": clears-within"));
   }
 
+  @Test
+  void everyHazardHasItsThreeKindsOfCase() {
+    for (Page p : BOOK.pages()) {
+      if (!p.principle()) {
+        Path file = p.folder().resolve("cases.yaml");
+        Set<String> kinds = new TreeSet<>();
+        if (Files.exists(file)) {
+          for (Object c : Rulebook.cases(file)) {
+            kinds.add(String.valueOf(((Map<?, ?>) c).get("fires")));
+          }
+        }
+        wrong(!kinds.contains("yes"), p.id() + ": no case that fires");
+        wrong(!kinds.contains("no"), p.id() + ": no quiet case");
+        wrong(!kinds.contains("could") && !missingLook(file), p.id() + ": no case where something is missing");
+      }
+    }
+    none();
+  }
+
   /** A look left out, a fact left out or a doubt may also be counted as its worst: then the hazard fires. */
   private static boolean missingLook(Path file) {
     String text = Rulebook.text(file);
@@ -176,6 +195,25 @@ class RulebookTest {
           wrong(c.values().size() == domain.size() && domain.size() > 1, r + ": `" + c.about() + "` matches every value it has");
         } else if (c.finding()) {
           c.values().forEach(a -> wrong(!ACTIONS.contains(a), r + ": no action `" + a + "`"));
+        }
+      }
+    }
+    none();
+  }
+
+  /** A derived value that no line of the sign makers writes down would leave its rule dead. */
+  @Test
+  void everyDerivedValueThatARuleWaitsForIsMadeSomewhere() throws IOException {
+    String makers = sources(Path.of("src/main/java/stillwarden/derive")) + sources(Path.of("src/main/java/stillwarden/order/SetupFaults.java"));
+    Set<String> derived = Rulebook.yaml("rules/words/signs.yaml").keySet();
+    Set<String> observed = ((Map<?, ?>) Rulebook.yaml("rules/words/log.yaml").get("saw")).keySet().stream().map(String::valueOf).collect(java.util.stream.Collectors.toSet());
+    for (Rule r : BOOK.rules()) {
+      for (Condition c : r.conditions()) {
+        if (derived.contains(c.about())) {
+          wrong(!makers.contains("\"" + c.about() + "\""), r + ": no maker of `" + c.about() + "`");
+          boolean told = observed.contains(c.about()) || Set.of("vapour-out", "crystals", "flow", "coolant-plan", "heater-lowers", "vent-place", "port-state", "feed-arm").contains(c.about());
+          boolean made = c.values().stream().anyMatch(v -> made(makers, v));
+          wrong(!told && !made, r + ": no maker writes `" + c.about() + "` " + c.values());
         }
       }
     }
@@ -264,10 +302,44 @@ class RulebookTest {
     none();
   }
 
+  @Test
+  void everyChecklistItemNamesALiveKey() {
+    Set<String> used = new HashSet<>();
+    BOOK.rules().forEach(r -> r.calls().stream().filter(c -> c.method().equals("proposeAs")).forEach(c -> used.add(c.words().get(0) + "/" + c.words().get(1))));
+    ((Map<?, ?>) WORDS.get("deeds")).forEach((id, d) -> {
+      wrong(!ACTIONS.contains(id.toString()), "actions.yaml words a deed `" + id + "` that is none");
+      keys(((Map<?, ?>) d).get("variants")).forEach(v -> wrong(!used.contains(id + "/" + v), "no rule says `" + id + "/" + v + "`"));
+    });
+    Set<String> banned = new HashSet<>();
+    BOOK.rules().forEach(r -> r.calls().stream().filter(c -> c.method().startsWith("forbid")).forEach(c -> banned.addAll(c.words())));
+    Map<String, Object> walk = Rulebook.yaml("checklists/en/walk-round.yaml");
+    Set<String> later = Set.of("method", "joints", "openings");
+    keys(walk.get("asks")).forEach(k -> wrong(!asked(k) && !later.contains(k) && !k.startsWith("openings") && !isKind(k), "walk-round asks `" + k + "`, which is no key"));
+    Rulebook.yaml("checklists/en/observations.yaml").keySet().forEach(k -> wrong(!keys(Rulebook.yaml("rules/words/log.yaml").get("saw")).contains(k), "no observation `" + k + "`"));
+    none();
+  }
+
   private static boolean isKind(String word) {
     int dot = word.indexOf('.');
     return dot < 0 ? stillwarden.describe.Vocabulary.get().kinds().contains(word) || stillwarden.describe.Vocabulary.get().roles().contains(word)
         : word.endsWith(".kind") || word.startsWith("policy.") || word.startsWith("site.");
+  }
+
+  @Test
+  void everyLimitIsUsedAndCited() throws IOException {
+    String java = sources(Path.of("src/main/java"));
+    StringBuilder data = new StringBuilder();
+    try (Stream<Path> files = Files.walk(Rulebook.ROOT)) {
+      files.filter(f -> f.toString().matches(".*\\.(yaml|drl)") && !f.startsWith(Rulebook.ROOT.resolve("limits"))).sorted().forEach(f -> data.append(Rulebook.text(f)));
+    }
+    for (String file : List.of("physics", "site", "time")) {
+      Rulebook.yaml("rules/limits/" + file + ".yaml").forEach((id, v) -> {
+        boolean used = java.contains("\"" + id + "\"") || Pattern.compile("(?m)[\\[ \"]" + Pattern.quote(id) + "[\\], \"}]").matcher(data).find();
+        wrong(!used, file + ".yaml: `" + id + "` is used nowhere");
+        cited(file, id, v);
+      });
+    }
+    none();
   }
 
   private void cited(String file, String id, Object v) {
