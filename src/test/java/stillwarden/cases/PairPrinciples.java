@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import stillwarden.derive.Situation;
+import stillwarden.derive.Standing;
 import stillwarden.order.Advice;
 
 /** What must hold whatever two faults come together. */
@@ -27,8 +28,10 @@ final class PairPrinciples {
 
   static List<String> broken(PairsTest.Judged a, PairsTest.Judged b, PairsTest.Judged both) {
     List<String> out = new ArrayList<>();
-    calmer(a.advice(), b.advice(), both.advice(), out);
-    cutFirst(a.advice(), b.advice(), both, out);
+    if (stillSo(a, both) && stillSo(b, both)) {
+      calmer(a.advice(), b.advice(), both.advice(), out);
+      cutFirst(a, b, both, out);
+    }
     bans(both.advice(), out);
     tip(both, out);
     closed(both, out);
@@ -49,8 +52,14 @@ final class PairPrinciples {
     }
   }
 
-  private static void cutFirst(Advice a, Advice b, PairsTest.Judged both, List<String> out) {
-    boolean wanted = cuts(a, both.facts()) || cuts(b, both.facts());
+  /** What was counted as worst because nobody had looked may be looked at by the other: that may calm, nothing else. */
+  private static boolean stillSo(PairsTest.Judged alone, PairsTest.Judged both) {
+    return alone.facts().signs().stream().filter(s -> s.standing() == Standing.COUNTED).allMatch(s -> both.facts().is(s.about(), s.value()))
+        && both.facts().is("live", "yes") == alone.facts().is("live", "yes");
+  }
+
+  private static void cutFirst(PairsTest.Judged a, PairsTest.Judged b, PairsTest.Judged both, List<String> out) {
+    boolean wanted = cuts(a.advice(), a.facts()) || cuts(b.advice(), b.facts());
     if (wanted && !cuts(both.advice(), both.facts())) {
       out.add("cut first: was " + Told.deeds(both.advice()));
     }
@@ -58,7 +67,7 @@ final class PairPrinciples {
 
   /** The first equipment step is an energy cut, due or done. */
   private static boolean cuts(Advice a, Situation s) {
-    return Told.deeds(a).stream().filter(Told::equipment).filter(d -> !MAY_LEAD.contains(d) && !(d.equals("lower-receiver") && s.is("power", "lost")))
+    return Told.deeds(a).stream().filter(Told::equipment).filter(d -> !d.equals("keep-heat-off") && !MAY_LEAD.contains(d) && !(d.equals("lower-receiver") && s.is("power", "lost")))
         .findFirst().filter(Told::cut).isPresent();
   }
 
