@@ -37,6 +37,8 @@ final class PairPrinciples {
     closed(both, out);
     away(both, out);
     contradictions(both.advice(), out);
+    electricity(both, out);
+    moreHeat(both.advice(), out);
     if (both.advice().actions().stream().filter(x -> x.state().equals("due")).count() > 7) {
       out.add("cap: more than seven due");
     }
@@ -97,10 +99,32 @@ final class PairPrinciples {
         out.add("closed: " + deeds.get(i) + " in " + deeds);
       }
     }
+    firstTwo(j, deeds, out);
     List<String> three = deeds.stream().filter(d -> Told.equipment(d) && !MAY_LEAD.contains(d)).limit(3).toList();
     if (!three.contains("sash-down") && !j.facts().is("attendance", "nobody") && !leaves(j.facts())) {
       out.add("sash: " + deeds);
     }
+  }
+
+  /** Without a way out: the energy, then the stored heat or the sash. */
+  private static void firstTwo(PairsTest.Judged j, List<String> deeds, List<String> out) {
+    List<String> two = deeds.stream().filter(d -> Told.equipment(d) && !MAY_LEAD.contains(d) && !d.equals("close-water")).limit(2).toList();
+    boolean right = two.size() == 2 && Told.cut(two.get(0)) && Set.of("lower-heat", "sash-down").contains(two.get(1));
+    if (!right && !leaves(j.facts()) && !j.facts().is("fire", "small")) {
+      out.add("first two: " + deeds);
+    }
+  }
+
+  /** Wet and live: nothing at the rig, and no water, before it is dead. */
+  private static void electricity(PairsTest.Judged j, List<String> out) {
+    List<String> equipment = Told.deeds(j.advice()).stream().filter(d -> Told.equipment(d) && !MAY_LEAD.contains(d)).toList();
+    if (j.facts().is("heater-live-wet", "yes") && (equipment.isEmpty() || !equipment.get(0).equals("isolate-remote"))) {
+      out.add("dead before touch: " + Told.deeds(j.advice()));
+    }
+  }
+
+  private static void moreHeat(Advice a, List<String> out) {
+    Set.of("raise-heat", "restart-low", "start-gentle-heat").stream().filter(d -> Told.deeds(a).contains(d)).forEach(d -> out.add("more heat: " + d));
   }
 
   private static boolean leaves(Situation s) {
