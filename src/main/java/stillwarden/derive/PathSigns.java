@@ -60,7 +60,8 @@ final class PathSigns {
   private Optional<Entry> lastFlow() {
     return Stream.of("drip", "drip-rate", "first-drop", "distillate-look").flatMap(id -> scene.run().lastSaw(id).stream())
         .filter(e -> !e.text().equals(Looks.NOT_SURE))
-        .max(java.util.Comparator.comparing(Entry::at).thenComparing(Entry::line));
+        // of two at one moment the worse counts: a look at the distillate does not prove a drip that is seen to have stopped
+        .max(java.util.Comparator.comparing(Entry::at).thenComparing(e -> flowWord(e).equals("none")).thenComparing(Entry::line));
   }
 
   PathFinding make() {

@@ -74,7 +74,7 @@ final class Answer {
     String verdict = leftOutMatters(leftOut, Verdicts.of(situation, findings, steps, notJudged));
     List<Advice.Action> actions = actions(steps);
     List<Advice.Question> asked = new Questions(situation).again(openLooks(leftOut)).of(findings, everything);
-    List<Advice.Action> shown = everything ? actions : Cap.most(MOST_STEPS, actions, asked);
+    List<Advice.Action> shown = everything ? actions : Cap.most(MOST_STEPS, actions, asked, awaited(plan.bans(), actions));
     Set<String> gate = gateItems(false);
     return new Advice(
         situation.rig().name(),
@@ -93,6 +93,12 @@ final class Answer {
         gate.size(),
         waivers(),
         Deference.words(situation, findings));
+  }
+
+  private static Set<String> awaited(List<Bans.Bar> bans, List<Advice.Action> actions) {
+    Set<String> out = new TreeSet<>();
+    bans.stream().filter(b -> actions.stream().anyMatch(a -> a.act().equals(b.deed()))).forEach(b -> out.add(b.until()));
+    return out;
   }
 
   private void markDone(List<Step> steps) {

@@ -100,13 +100,19 @@ final class Arrange {
       // the leisurely order of a planned end gives way once a hazard asks for an energy cut
       boolean givesWay = alarm && Hazards.of(f.hazard()).end();
       for (Statement s : f.statements()) {
-        if (s instanceof Statement.Before b && !givesWay) {
+        if (s instanceof Statement.Before b && !givesWay && !holdsUp(b, bars)) {
           link(steps, b.first(), b.then(), out);
         }
       }
     }
     bans.all().forEach(bar -> bar.untils().forEach(until -> link(steps, until, bar.deed(), out)));
     return out;
+  }
+
+  /** What itself has to wait never holds back an energy cut. */
+  private static boolean holdsUp(Statement.Before b, Map<String, Bar> bars) {
+    boolean cut = Deeds.ids().contains(b.then()) && Deeds.of(b.then()).cut();
+    return cut && bars.containsKey(b.first()) && !bars.get(b.first()).until().isEmpty();
   }
 
   private static boolean cuts(Finding f) {

@@ -2,6 +2,7 @@ package stillwarden.order;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 import java.util.function.Predicate;
 
 /**
@@ -11,7 +12,8 @@ import java.util.function.Predicate;
 final class Cap {
   private Cap() {}
 
-  static List<Advice.Action> most(int most, List<Advice.Action> all, List<Advice.Question> asked) {
+  /** @param awaited deeds that a ban on another waits for: they are never given up */
+  static List<Advice.Action> most(int most, List<Advice.Action> all, List<Advice.Question> asked, Set<String> awaited) {
     List<Advice.Action> out = new ArrayList<>(all);
     List<Predicate<Advice.Action>> yielding = List.of(
         a -> look(a) && asked.stream().anyMatch(q -> a.act().endsWith(subject(q))),
@@ -23,7 +25,7 @@ final class Cap {
     // the first is never given up: it carries the cautions
     yielding.forEach(y -> {
       for (int i = out.size() - 1; i > 0 && out.size() > most; i--) {
-        if (y.test(out.get(i))) {
+        if (y.test(out.get(i)) && !awaited.contains(out.get(i).act())) {
           out.remove(i);
         }
       }

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import stillwarden.derive.Situation;
+import stillwarden.derive.Standing;
 import stillwarden.order.Advice;
 
 /** What must hold whatever two faults come together. */
@@ -27,13 +28,17 @@ final class PairPrinciples {
 
   static List<String> broken(PairsTest.Judged a, PairsTest.Judged b, PairsTest.Judged both) {
     List<String> out = new ArrayList<>();
-    calmer(a.advice(), b.advice(), both.advice(), out);
-    cutFirst(a.advice(), b.advice(), both, out);
+    if (stillSo(a, both) && stillSo(b, both)) {
+      calmer(a.advice(), b.advice(), both.advice(), out);
+      cutFirst(a, b, both, out);
+    }
     bans(both.advice(), out);
     tip(both, out);
     closed(both, out);
     away(both, out);
     contradictions(both.advice(), out);
+    electricity(both, out);
+    moreHeat(both.advice(), out);
     if (both.advice().actions().stream().filter(x -> x.state().equals("due")).count() > 7) {
       out.add("cap: more than seven due");
     }
@@ -49,8 +54,14 @@ final class PairPrinciples {
     }
   }
 
-  private static void cutFirst(Advice a, Advice b, PairsTest.Judged both, List<String> out) {
-    boolean wanted = cuts(a, both.facts()) || cuts(b, both.facts());
+  /** What was counted as worst because nobody had looked may be looked at by the other: that may calm, nothing else. */
+  private static boolean stillSo(PairsTest.Judged alone, PairsTest.Judged both) {
+    return alone.facts().signs().stream().filter(s -> s.standing() == Standing.COUNTED).allMatch(s -> both.facts().is(s.about(), s.value()))
+        && both.facts().is("live", "yes") == alone.facts().is("live", "yes");
+  }
+
+  private static void cutFirst(PairsTest.Judged a, PairsTest.Judged b, PairsTest.Judged both, List<String> out) {
+    boolean wanted = cuts(a.advice(), a.facts()) || cuts(b.advice(), b.facts());
     if (wanted && !cuts(both.advice(), both.facts())) {
       out.add("cut first: was " + Told.deeds(both.advice()));
     }
@@ -58,7 +69,7 @@ final class PairPrinciples {
 
   /** The first equipment step is an energy cut, due or done. */
   private static boolean cuts(Advice a, Situation s) {
-    return Told.deeds(a).stream().filter(Told::equipment).filter(d -> !MAY_LEAD.contains(d) && !(d.equals("lower-receiver") && s.is("power", "lost")))
+    return Told.deeds(a).stream().filter(Told::equipment).filter(d -> !d.equals("keep-heat-off") && !MAY_LEAD.contains(d) && !(d.equals("lower-receiver") && s.is("power", "lost")))
         .findFirst().filter(Told::cut).isPresent();
   }
 
@@ -88,10 +99,32 @@ final class PairPrinciples {
         out.add("closed: " + deeds.get(i) + " in " + deeds);
       }
     }
+    firstTwo(j, deeds, out);
     List<String> three = deeds.stream().filter(d -> Told.equipment(d) && !MAY_LEAD.contains(d)).limit(3).toList();
     if (!three.contains("sash-down") && !j.facts().is("attendance", "nobody") && !leaves(j.facts())) {
       out.add("sash: " + deeds);
     }
+  }
+
+  /** Without a way out: the energy, then the stored heat or the sash. */
+  private static void firstTwo(PairsTest.Judged j, List<String> deeds, List<String> out) {
+    List<String> two = deeds.stream().filter(d -> Told.equipment(d) && !MAY_LEAD.contains(d) && !d.equals("close-water")).limit(2).toList();
+    boolean right = two.size() == 2 && Told.cut(two.get(0)) && Set.of("lower-heat", "sash-down").contains(two.get(1));
+    if (!right && !leaves(j.facts()) && !j.facts().is("fire", "small")) {
+      out.add("first two: " + deeds);
+    }
+  }
+
+  /** Wet and live: nothing at the rig, and no water, before it is dead. */
+  private static void electricity(PairsTest.Judged j, List<String> out) {
+    List<String> equipment = Told.deeds(j.advice()).stream().filter(d -> Told.equipment(d) && !MAY_LEAD.contains(d)).toList();
+    if (j.facts().is("heater-live-wet", "yes") && (equipment.isEmpty() || !equipment.get(0).equals("isolate-remote"))) {
+      out.add("dead before touch: " + Told.deeds(j.advice()));
+    }
+  }
+
+  private static void moreHeat(Advice a, List<String> out) {
+    Set.of("raise-heat", "restart-low", "start-gentle-heat").stream().filter(d -> Told.deeds(a).contains(d)).forEach(d -> out.add("more heat: " + d));
   }
 
   private static boolean leaves(Situation s) {
