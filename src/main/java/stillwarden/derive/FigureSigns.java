@@ -19,7 +19,7 @@ final class FigureSigns {
     verdict("condenser-margin", n.condenserMargin(), "condenser-capacity");
     verdict("receiver-capacity", n.receiverCapacity(), "receiver-capacity");
     verdict("water-budget", n.waterBudget(), "water-needed");
-    verdict("coolant-strategy", n.coolantStrategy(), "coolant-strategy");
+    coolant(n);
     verdict("mantle-fit", n.mantleFit(), "mantle-fit");
     verdict("oil-immiscible", n.oilImmiscible(), "boiling-point-here");
     out.seenIf(n.barometerConflict(), "barometer-conflict", n.barometerConflict() ? "barometer and elevation disagree by more than 3 kPa" : "barometer and elevation agree, or one is missing");
@@ -28,6 +28,18 @@ final class FigureSigns {
       out.seen("pressure-known", "yes", "pressure of the place by barometer or elevation");
     } else {
       out.seen("pressure-known", "", "no", "neither barometer nor elevation stated", null, "place.elevation");
+    }
+  }
+
+  /** What is seen outranks what was computed: coolant held off as the site permits, and no vapour leaves. */
+  private void coolant(Figures n) {
+    boolean heldOff = scene.is(Role.CONDENSER, "coolant.plan", "held-off") && scene.policy().permits("held-off-coolant");
+    Looks.Look outlet = scene.looks().at("vapour-past-condenser", Shelves.of(scene.policy(), "vapour-past-condenser"), null, null);
+    boolean inside = outlet.fresh() && outlet.word().filter("none"::equals).isPresent() && scene.time().firstDrop().isPresent();
+    if (n.coolantStrategy().equals("unmet") && heldOff && inside) {
+      out.seen("coolant-strategy", "met", "held off as the site permits, and no vapour leaves, " + scene.told(outlet.entry().get()));
+    } else {
+      verdict("coolant-strategy", n.coolantStrategy(), "coolant-strategy");
     }
   }
 

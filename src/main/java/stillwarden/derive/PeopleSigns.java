@@ -17,6 +17,9 @@ final class PeopleSigns {
     this.out = out;
   }
 
+  // bitter almond: hydrogen cyanide; rotten eggs: hydrogen sulfide; mustard: isothiocyanates
+  private static final Set<String> WARNING_SMELLS = Set.of("almond", "rotten-eggs", "mustard");
+
   void make() {
     attendance();
     handover();
@@ -104,7 +107,10 @@ final class PeopleSigns {
     Stream<Entry> events = Stream.of("smoke", "vapour-from-joint", "joint-apart", "crack", "leak-under", "vapour-past-condenser", "spill", "hood", "symptoms", "gas-without-liquid", "smell")
         .flatMap(id -> scene.run().lastSaw(id).stream()).filter(e -> !Set.of("no", "none", "running", Looks.NOT_SURE).contains(e.text()));
     Optional<Entry> out1 = events.max(java.util.Comparator.comparing(Entry::at));
-    if (bad && out1.isPresent()) {
+    Optional<Entry> warning = scene.run().lastSaw("smell").filter(e -> WARNING_SMELLS.contains(e.text()));
+    if (warning.isPresent()) {
+      out.seen("toxic-release", "", "yes", scene.told(warning.get()) + ", a smell that warns of poison whatever the charge is", warning.get().at(), "smell");
+    } else if (bad && out1.isPresent()) {
       out.seen("toxic-release", "", "yes", scene.told(out1.get()) + ", and the charge is toxic or not identified", out1.get().at(), "symptoms");
     } else {
       out.seen("toxic-release", "no", bad ? "nothing is out" : "the charge is not known to be toxic");

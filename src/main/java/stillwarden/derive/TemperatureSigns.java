@@ -37,7 +37,7 @@ final class TemperatureSigns {
     if (head.isEmpty()) {
       return;
     }
-    double top = scene.number("water-boiling-point-here").map(Estimate::high).orElse(scene.limit("water-boiling-point-unknown-place") - 273.15) + error();
+    double top = scene.number("water-boiling-point-here").map(Estimate::high).orElseGet(this::anywhere) + error();
     Entry last = head.get(head.size() - 1);
     if (celsius(last) <= top) {
       out.seen("head-high", "no", scene.told(last) + ", limit here " + round(top) + " °C");
@@ -49,6 +49,12 @@ final class TemperatureSigns {
     }
     boolean held = !last.instrument() || !since.plus(scene.limitTime("head-hold")).isAfter(scene.at());
     out.seen("head-high", "", held ? "yes" : "no", scene.told(last) + ", above " + round(top) + " °C (water's boiling point here and the errors)" + (held ? "" : ", not yet held"), since, "head-temperature");
+  }
+
+  /** Nobody knows the pressure here: ordinary high weather explains less than the highest there is, and with the level unseen nothing else does. */
+  private double anywhere() {
+    boolean levelSeen = out.all().stream().anyMatch(s -> s.about().equals("flask-level") && s.isSeen());
+    return scene.limit(levelSeen ? "water-boiling-point-unknown-place" : "water-boiling-point-unknown-place-level-unseen") - 273.15;
   }
 
   private void fell() {

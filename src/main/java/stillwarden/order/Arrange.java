@@ -9,7 +9,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
-import java.util.TreeSet;
 import java.util.function.ToDoubleFunction;
 import java.util.function.ToIntFunction;
 import stillwarden.judge.Finding;
@@ -26,52 +25,33 @@ final class Arrange {
    * @param bans deed to its ban, deadliest first
    * @param cycle deeds whose relations contradict each other: a defect of the rulebook, reported and broken by the ladder
    */
-  record Plan(List<Step> steps, List<Bar> bans, List<String> cycle) {}
-
-  /** A deed that must not be done, or not before something. */
-  record Bar(String deed, String until, boolean named, List<Finding> reasons) {
-    /** A plain ban is stronger than one with {@code until}; what a rule named is told, what only a group brought is not. */
-    Bar with(Bar other) {
-      String both = until.isEmpty() || other.until.isEmpty() ? "" : until;
-      return new Bar(deed, both, named || other.named, joined(reasons, other.reasons));
-    }
-  }
+  record Plan(List<Step> steps, List<Bans.Bar> bans, List<String> cycle) {}
 
   private final ToDoubleFunction<Step> timeToHarm;
   private final ToIntFunction<Step> walkRound;
 
-  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound) {
+  private final boolean walking;
+
+  /** @param walking an inspection: in walk-round order, for nothing is hot yet */
+  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound, boolean walking) {
     this.timeToHarm = timeToHarm;
     this.walkRound = walkRound;
+    this.walking = walking;
   }
 
   Plan arrange(List<Finding> active) {
-    Map<String, Bar> bars = bars(active);
     Map<String, Step> steps = merged(active);
-    replaceWeaker(steps);
-    steps.values().removeIf(s -> barred(s, bars, steps.values()));
-    Set<Edge> edges = edges(active, bars, steps.values());
+    Bans bans = Bans.of(active);
+    // first the bans: a barred deed must not take a weaker one with it; then again, for what waited for the weaker one
+    bans.waitForWhatIsPossible(steps.values());
+    bans.removeFrom(steps);
+    bans.replaced(replaceWeaker(steps));
+    bans.waitForWhatIsPossible(steps.values());
+    bans.removeFrom(steps);
+    Set<Edge> edges = edges(active, bans, steps.values());
     List<String> cycle = new ArrayList<>();
     List<Step> sorted = sort(steps.values(), edges, cycle);
-    return new Plan(placePeople(sorted, edges), List.copyOf(bars.values()), cycle);
-  }
-
-  private static Map<String, Bar> bars(List<Finding> active) {
-    Map<String, Bar> out = new LinkedHashMap<>();
-    for (Finding f : active) {
-      for (Statement s : f.statements()) {
-        if (s instanceof Statement.Forbid ban) {
-          Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until(), ban.deed().equals(deed), List.of(f)), Bar::with));
-        }
-      }
-    }
-    return out;
-  }
-
-  private static List<Finding> joined(List<Finding> a, List<Finding> b) {
-    List<Finding> out = new ArrayList<>(a);
-    out.addAll(b);
-    return List.copyOf(out);
+    return new Plan(placePeople(sorted, edges), bans.deadliestFirst(), cycle);
   }
 
   private static Map<String, Step> merged(List<Finding> active) {
@@ -92,9 +72,9 @@ final class Arrange {
     return out;
   }
 
-  private static void replaceWeaker(Map<String, Step> steps) {
-    Set<String> present = new TreeSet<>();
-    steps.values().forEach(s -> present.add(s.id()));
+  /** @return each deed that fell, with the one it fell to */
+  private static Map<String, String> replaceWeaker(Map<String, Step> steps) {
+    Map<String, String> fell = new HashMap<>();
     for (Step strong : List.copyOf(steps.values())) {
       for (String weak : strong.deed.replaces()) {
         // what is itself replaced by something stronger still does its own replacing: the relation is transitive
@@ -102,32 +82,18 @@ final class Arrange {
           boolean falls = s.id().equals(weak) && s != strong;
           if (falls) {
             strong.reasons.addAll(s.reasons);
+            fell.put(weak, strong.id());
           }
           return falls;
         });
       }
     }
-  }
-
-  private static boolean barred(Step s, Map<String, Bar> bars, Collection<Step> all) {
-    Bar bar = bars.get(s.id());
-    if (bar == null) {
-      return false;
-    }
-    if (bar.until().isEmpty()) {
-      return true;
-    }
-    boolean action = Deeds.ids().contains(bar.until());
-    if (!action) {
-      s.iff = bar.until();
-      return false;
-    }
-    return all.stream().noneMatch(o -> o.id().equals(bar.until()));
+    return fell;
   }
 
   private record Edge(Step first, Step then) {}
 
-  private static Set<Edge> edges(List<Finding> active, Map<String, Bar> bars, Collection<Step> steps) {
+  private static Set<Edge> edges(List<Finding> active, Bans bans, Collection<Step> steps) {
     Set<Edge> out = new HashSet<>();
     boolean alarm = active.stream().anyMatch(f -> !Hazards.speaking(f).end() && !Hazards.of(f.hazard()).end() && cuts(f));
     for (Finding f : active) {
@@ -139,11 +105,7 @@ final class Arrange {
         }
       }
     }
-    for (Bar bar : bars.values()) {
-      if (!bar.until().isEmpty()) {
-        link(steps, bar.until(), bar.deed(), out);
-      }
-    }
+    bans.all().forEach(bar -> bar.untils().forEach(until -> link(steps, until, bar.deed(), out)));
     return out;
   }
 
@@ -162,6 +124,14 @@ final class Arrange {
   }
 
   private Comparator<Step> byLadder() {
+    if (walking) {
+      return Comparator.<Step>comparingInt(s -> s.id().equals("do-not-start") ? 0 : 1)
+          .thenComparingInt(walkRound)
+          .thenComparingDouble(s -> s.deed.ladder())
+          .thenComparing(Step::id)
+          .thenComparing(s -> s.part)
+          .thenComparing(s -> s.variants.toString());
+    }
     return Comparator.<Step>comparingDouble(s -> s.iff.isEmpty() ? s.deed.ladder() : 8.5 + s.deed.ladder() / 100)
         .thenComparingDouble(timeToHarm)
         .thenComparingInt(walkRound)
@@ -210,12 +180,17 @@ final class Arrange {
     List<Step> rest = new ArrayList<>(sorted);
     rest.removeAll(aside);
     List<Step> equipment = rest.stream().filter(s -> s.deed.equipment()).toList();
-    if (aside.isEmpty() || equipment.isEmpty() || !equipment.get(0).deed.cut()) {
+    if (aside.isEmpty() || equipment.isEmpty() || !firstMove(equipment.get(0))) {
       return sorted;
     }
     int keep = equipment.size() > 2 && equipment.get(2).id().equals("sash-down") ? 3 : Math.min(2, equipment.size());
     int place = rest.indexOf(equipment.get(keep - 1)) + 1;
     rest.addAll(place, aside);
     return rest;
+  }
+
+  /** An energy cut, or flames put out before it. */
+  private static boolean firstMove(Step s) {
+    return s.deed.cut() || s.id().equals("flame-out");
   }
 }

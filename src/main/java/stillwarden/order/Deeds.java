@@ -22,6 +22,8 @@ final class Deeds {
    * @param replaces weaker deeds that fall away
    * @param lasting a state: done once logged, until one of {@code undoneBy} is logged
    * @param seenBy observations {@code id=value} that show it done
+   * @param orElse what a ban waits for instead where this deed cannot be done
+   * @param neverLost a ban on this deed that waits for what cannot be done is none
    */
   record Deed(
       String id,
@@ -33,7 +35,9 @@ final class Deeds {
       List<String> replaces,
       boolean lasting,
       Set<String> undoneBy,
-      List<String> seenBy) {
+      List<String> seenBy,
+      List<String> orElse,
+      boolean neverLost) {
 
     boolean equipment() {
       return kind.equals("equipment");
@@ -77,7 +81,9 @@ final class Deeds {
               t.words("replaces"),
               yes(t, "lasting"),
               Set.copyOf(t.words("undone-by")),
-              t.words("seen-by")));
+              t.words("seen-by"),
+              t.words("or-else"),
+              yes(t, "never-lost")));
     }
     return out;
   }

@@ -18,6 +18,7 @@ final class Bench {
   private static final double SEA_LEVEL = 101_325;
 
   final Rig rig;
+  final RigParts parts;
   final Policy policy;
   final RunState run;
   final Atmosphere atmosphere;
@@ -36,9 +37,14 @@ final class Bench {
   final List<String> notes = new ArrayList<>();
 
   Bench(Rig rig, Policy policy, List<Entry> entries, Instant at) {
+    this(rig, policy, RunState.of(entries, at));
+  }
+
+  Bench(Rig rig, Policy policy, RunState run) {
     this.rig = rig;
+    this.parts = RigParts.of(rig);
     this.policy = policy;
-    this.run = RunState.of(entries, at);
+    this.run = run;
     this.atmosphere = run.barometer().isPresent()
         ? Atmosphere.of(run.barometer(), rig.word("place.barometer-is"), rig.si("place.elevation"))
         : Atmosphere.of(rig);
@@ -51,9 +57,9 @@ final class Bench {
     boolean usable = immiscible.filter(i -> i.verdict() != Immiscibility.Verdict.REFUSED).isPresent();
     this.two = usable ? charge.oil().map(o -> TwoLiquids.at(pascal, o)) : Optional.empty();
     this.course = two.filter(t -> t.oilTotal() > 0 && tooMuchUnknown(t).isEmpty()).map(t -> course(t.oil()));
-    this.flask = Roles.flask(rig);
+    this.flask = parts.flask();
     this.volume = flask.flatMap(f -> f.si("volume"));
-    this.heat = Heat.of(rig, run, boiling(), room);
+    this.heat = Heat.of(parts, run, boiling(), room);
   }
 
   /** Temperature of the boil, K: with the oil where that is known. */

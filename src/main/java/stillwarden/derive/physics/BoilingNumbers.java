@@ -24,7 +24,7 @@ final class BoilingNumbers {
 
   private static void place(Bench b, Numbers.Out out) {
     if (!b.placeKnown) {
-      String reason = "neither barometer nor elevation of the place is known";
+      String reason = unplaced(b);
       out.absent("pressure-here", reason, "place.barometer", "place.elevation");
       out.absent("water-boiling-point-here", reason, "place.barometer", "place.elevation");
       return;
@@ -32,6 +32,12 @@ final class BoilingNumbers {
     Band p = b.atmosphere.pascal().orElseThrow();
     out.put("pressure-here", p, b.atmosphere.method(), "ISO-2533", b.atmosphere.notes());
     out.put("water-boiling-point-here", p.map(WaterSteam::boilingPoint), "saturation line", "IAPWS-IF97", List.of());
+  }
+
+  private static String unplaced(Bench b) {
+    return b.rig.si("place.barometer").isPresent()
+        ? "a pressure reduced to sea level says nothing about the place without its elevation"
+        : "neither barometer nor elevation of the place is known";
   }
 
   /** Why the numbers of the oil cannot be had. */
@@ -65,7 +71,7 @@ final class BoilingNumbers {
       Band place = b.atmosphere.pascal().orElseThrow().map(WaterSteam::boilingPoint);
       out.put("boiling-point-here", place.minus(widened), "both layers' pressures add up to that of the place", SOURCE, notes);
     } else {
-      out.absent("boiling-point-here", "neither barometer nor elevation of the place is known", "place.barometer", "place.elevation");
+      out.absent("boiling-point-here", unplaced(b), "place.barometer", "place.elevation");
     }
     Band ratio = Band.of(1).over(new Band(1 - Math.min(0.9, t.error()), 1, 1 + t.error()));
     out.put(RATIOS[0], ratio.times(t.moleRatio()), "p(water) / p(oil), at the start", SOURCE, notes);

@@ -17,7 +17,7 @@ import stillwarden.describe.Tree;
  * @param oil composition of the oil; its amount is the nominal expected mass, or 1 kg when that is unknown
  * @param oilMass kg expected
  * @param uptake m3 of water that the plant holds
- * @param displaced m3 that the solids displace
+ * @param displaced m3 that solids, or a free oil layer, displace
  * @param covers m3 of level that covers the solids
  * @param foams {@code no, some, strongly}
  * @param dispersed true when the oil has to come out of plant matter first
@@ -62,9 +62,12 @@ public record Charge(
       missing.add("charge.oil.makeup");
     }
     double kg = mass.orElse(0.0);
+    boolean dispersed = solids && kg > 0;
+    // a free oil layer takes its own room in the flask; oil inside plant matter is counted with the plant
+    Band layer = dispersed ? Band.of(0) : layer(oil, oilMass);
     Optional<String> foams = rig.word("charge.foams").or(() -> plant.text("foams"));
-    return new Charge(rig.si("charge.water"), kg, oil, oilMass, uptake(plant, kg, notes), displaced(rig, plant, kg, notes), covers(plant, kg, notes),
-        foams, solids && kg > 0, List.copyOf(notes), List.copyOf(missing));
+    return new Charge(rig.si("charge.water"), kg, oil, oilMass, uptake(plant, kg, notes), displaced(rig, plant, kg, notes).plus(layer), covers(plant, kg, notes),
+        foams, dispersed, List.copyOf(notes), List.copyOf(missing));
   }
 
   private static Optional<Band> oilMass(Rig rig, Tree plant, Optional<Double> mass, List<String> notes) {
@@ -92,6 +95,11 @@ public record Charge(
       shares.put(REST, 1 - sum);
     }
     return Optional.of(Oil.ofMassShares(shares, mass));
+  }
+
+  private static Band layer(Optional<Oil> oil, Optional<Band> mass) {
+    double density = oil.flatMap(Oil::density).orElseGet(() -> Limits.value("oil-density-default"));
+    return mass.map(m -> m.times(1 / density)).orElse(Band.of(0));
   }
 
   private static Band uptake(Tree plant, double kg, List<String> notes) {

@@ -20,7 +20,7 @@ record CondenserNumbers(
   private static final String SOURCE = "LMTD; rules/limits";
 
   static CondenserNumbers put(Bench b, Optional<BoilUp> rate, Progress now, Numbers.Out out) {
-    Optional<Part> part = Roles.condenser(b.rig);
+    Optional<Part> part = b.parts.condenser();
     Optional<Condenser> condenser = part.flatMap(p -> Condenser.of(p, b.run));
     Optional<Band> duty = duty(b, rate);
     duty.ifPresentOrElse(d -> out.put("condenser-duty", d, "boil-up, condensed and cooled", "IAPWS-IF97", rate.map(BoilUp::notes).orElse(List.of())),

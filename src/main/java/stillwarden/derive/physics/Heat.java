@@ -22,15 +22,15 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
   }
 
   /** Empty when neither a power nor a flask size is known. */
-  static Optional<Heat> of(Rig rig, RunState run, double boiling, double room) {
+  static Optional<Heat> of(RigParts parts, RunState run, double boiling, double room) {
     List<String> notes = new ArrayList<>();
-    Optional<Double> volume = Roles.flask(rig).flatMap(f -> f.si("volume"));
-    Optional<Band> full = full(rig, volume, notes);
+    Optional<Double> volume = parts.flask().flatMap(f -> f.si("volume"));
+    Optional<Band> full = full(parts, volume, notes);
     if (full.isEmpty()) {
       return Optional.empty();
     }
     boolean measured = run.watts().isPresent() && run.heatOn();
-    Band electrical = measured ? Band.of(run.watts().get()) : full.get().times(setting(rig, run, notes));
+    Band electrical = measured ? Band.of(run.watts().get()) : full.get().times(setting(parts, run, notes));
     Band setting = measured ? Band.of(1) : electrical.nominal() > 0 ? electrical.over(full.get()).atMost(1) : Band.of(0);
     Band efficiency = Limits.band("heater-efficiency");
     Band loss = loss(volume.orElse(0.0), boiling, room);
@@ -39,8 +39,8 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
     return Optional.of(new Heat(full.get(), setting, efficiency, loss, net, measured, notes));
   }
 
-  private static Optional<Band> full(Rig rig, Optional<Double> volume, List<String> notes) {
-    Optional<Part> heater = Roles.heater(rig);
+  private static Optional<Band> full(RigParts parts, Optional<Double> volume, List<String> notes) {
+    Optional<Part> heater = parts.heater();
     Optional<Double> stated = heater.flatMap(h -> h.si("power"));
     if (stated.isPresent()) {
       return stated.map(Band::of);
@@ -55,8 +55,8 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
     return Optional.of(new Band(catalogue.low() * (1 - scatter), catalogue.nominal(), catalogue.high() * (1 + scatter)));
   }
 
-  private static Band setting(Rig rig, RunState run, List<String> notes) {
-    Optional<Part> regulator = Roles.regulator(rig);
+  private static Band setting(RigParts parts, RunState run, List<String> notes) {
+    Optional<Part> regulator = parts.regulator();
     Optional<Double> dial = run.setting().filter(s -> s > 0);
     if (dial.isEmpty()) {
       dial = regulator.flatMap(r -> r.si("setting")).filter(s -> s > 0);
@@ -111,6 +111,7 @@ public record Heat(Band full, Band setting, Band efficiency, Band loss, Band net
     Band glass = flaskVolume.map(v -> Limits.byFlask("glass-mass", v, 1e-3)).orElse(Band.of(0));
     double liquid = water * WaterSteam.COLD_DENSITY * WaterSteam.liquidHeatCapacity(333, 101_325);
     double plant = charge.plantMass() * Limits.value("plant-heat-capacity");
-    return glass.times(Limits.value("glass-heat-capacity")).plus(Band.of(liquid + plant));
+    double oil = charge.dispersed() ? 0 : charge.oilMass().map(Band::nominal).orElse(0.0) * Limits.value("oil-heat-capacity");
+    return glass.times(Limits.value("glass-heat-capacity")).plus(Band.of(liquid + plant + oil));
   }
 }

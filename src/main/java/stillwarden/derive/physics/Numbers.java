@@ -7,7 +7,6 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Stream;
 import stillwarden.derive.Estimate;
-import stillwarden.describe.Rig;
 
 /**
  * Everything computed for one rig at one moment.
@@ -68,10 +67,10 @@ public record Numbers(Map<String, Estimate> all, Map<String, String> words, Side
         Map.entry("L/min", new double[] {6e4, 0}), Map.entry("s", new double[] {1, 0}), Map.entry("", new double[] {1, 0}));
     private final Map<String, Estimate> all = new LinkedHashMap<>();
     private final Map<String, String> words = new LinkedHashMap<>();
-    private final Rig rig;
+    private final RigParts parts;
 
-    Out(Rig rig) {
-      this.rig = rig;
+    Out(RigParts parts) {
+      this.parts = parts;
     }
 
     void put(String name, Band si, String method, String source, List<String> notes) {
@@ -85,7 +84,7 @@ public record Numbers(Map<String, Estimate> all, Map<String, String> words, Side
     }
 
     void absent(String name, String reason, String... missing) {
-      List<String> paths = Stream.of(missing).map(p -> Roles.path(rig, p)).filter(p -> rig.datum(p).isEmpty()).toList();
+      List<String> paths = Stream.of(missing).map(p -> parts.path(p)).filter(p -> parts.rig().datum(p).isEmpty()).toList();
       all.put(name, Estimate.absent(name, UNITS.get(name), reason, paths));
     }
 

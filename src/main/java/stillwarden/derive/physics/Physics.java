@@ -12,7 +12,26 @@ import stillwarden.describe.Rig;
 
 /** The computation: every number of the contract for a rig, its site's policy and the run so far. */
 public final class Physics {
-  private Physics() {}
+  private final Rig rig;
+  private final Policy policy;
+  private RunState lastRun;
+  private Numbers lastNumbers;
+
+  /** For many moments of one run: a line that tells the computation nothing new costs no computation. */
+  public Physics(Rig rig, Policy policy) {
+    this.rig = rig;
+    this.policy = policy;
+  }
+
+  /** As {@link #numbers(Rig, Policy, List, Instant)}. */
+  public Numbers numbers(List<Entry> entries, Instant at) {
+    RunState run = RunState.of(entries, at);
+    if (!run.equals(lastRun)) {
+      lastNumbers = of(new Bench(rig, policy, run)).numbers();
+      lastRun = run;
+    }
+    return lastNumbers;
+  }
 
   /**
    * @param entries usable log lines sorted by time with corrections applied; later ones than {@code at} are left out; empty before a run
@@ -28,7 +47,7 @@ public final class Physics {
   static Worked of(Bench b) {
     Optional<BoilUp> rate = BoilUp.of(b);
     Progress now = Progress.of(b, rate);
-    Numbers.Out out = new Numbers.Out(b.rig);
+    Numbers.Out out = new Numbers.Out(b.parts);
     BoilingNumbers.put(b, out);
     TimeNumbers.put(b, rate, now, out);
     CondenserNumbers condenser = CondenserNumbers.put(b, rate, now, out);
@@ -54,7 +73,7 @@ public final class Physics {
       if (b.run.feeds().isEmpty() || net <= 0) {
         return Optional.empty();
       }
-      double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
+      double from = b.parts.reservoir().flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
       Instant until = Instant.MIN;
       boolean stops = false;
       for (RunState.Amount f : b.run.feeds()) {
@@ -97,7 +116,7 @@ public final class Physics {
   }
 
   private static Optional<SideFacts.Shortage> receiver(Bench b) {
-    Optional<Double> volume = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> volume = b.parts.receiver().flatMap(p -> p.si("volume"));
     Optional<Double> target = b.rig.si("target.distillate");
     double factor = Limits.value("receiver-capacity-min", b.policy);
     if (volume.isEmpty() || target.isEmpty() || volume.get() >= factor * target.get()) {
@@ -110,13 +129,13 @@ public final class Physics {
   }
 
   private static Optional<SideFacts.Fit> mantle(Bench b) {
-    Optional<Double> fits = Roles.heater(b.rig).flatMap(h -> h.si("fits"));
+    Optional<Double> fits = b.parts.heater().flatMap(h -> h.si("fits"));
     if (fits.isEmpty() || b.volume.isEmpty()) {
       return Optional.empty();
     }
     double ratio = fits.get() / b.volume.get();
     double allowed = Limits.value("mantle-fit-factor");
-    Optional<Double> zone = Roles.heater(b.rig).flatMap(h -> h.si("heated-up-to"));
+    Optional<Double> zone = b.parts.heater().flatMap(h -> h.si("heated-up-to"));
     List<String> why = new ArrayList<>();
     if (ratio > allowed || ratio < 1 / allowed) {
       why.add(String.format(Locale.ROOT, "the heater is made for %.0f mL, the flask holds %.0f mL", fits.get() * 1e6, b.volume.get() * 1e6));

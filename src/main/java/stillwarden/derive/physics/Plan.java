@@ -63,7 +63,7 @@ public record Plan(Numbers numbers, List<Curve> curves, List<End> ends) {
         ends.add(end("reservoir", reservoir / rate.waterShare()));
       }
       ends.add(end("minimum-level", (reservoir + Math.max(0, level - minimum)) / rate.waterShare()));
-      Roles.receiver(b.rig).flatMap(p -> p.si("volume")).ifPresent(v -> ends.add(end("full-receiver", v * Limits.value("receiver-full-share"))));
+      b.parts.receiver().flatMap(p -> p.si("volume")).ifPresent(v -> ends.add(end("full-receiver", v * Limits.value("receiver-full-share"))));
       ends.sort((x, y) -> Double.compare(x.minutes(), y.minutes()));
       return ends;
     }

@@ -18,15 +18,15 @@ final class PressureNumbers {
 
   private static void vent(Bench b, Numbers.Out out) {
     List<Double> bores = new ArrayList<>();
-    Roles.takeOff(b.rig).flatMap(p -> p.si("side-arm-bore")).ifPresent(bores::add);
-    Roles.ventHose(b.rig).flatMap(p -> p.si("bore")).ifPresent(bores::add);
-    Roles.condenser(b.rig).flatMap(p -> p.si("tube-bore")).ifPresent(bores::add);
-    if (Roles.takeOff(b.rig).flatMap(p -> p.si("side-arm-bore")).isEmpty() || b.heat.isEmpty()) {
+    b.parts.takeOff().flatMap(p -> p.si("side-arm-bore")).ifPresent(bores::add);
+    b.parts.ventHose().flatMap(p -> p.si("bore")).ifPresent(bores::add);
+    b.parts.condenser().flatMap(p -> p.si("tube-bore")).ifPresent(bores::add);
+    if (b.parts.takeOff().flatMap(p -> p.si("side-arm-bore")).isEmpty() || b.heat.isEmpty()) {
       out.absent("vent-pressure-drop", "bore of the vent or power of the heater not stated", "take-off.side-arm-bore", "mantle.power");
       return;
     }
     double bore = bores.stream().mapToDouble(Double::doubleValue).min().orElseThrow();
-    double length = Roles.ventHose(b.rig).flatMap(p -> p.si("length")).orElse(0.0);
+    double length = b.parts.ventHose().flatMap(p -> p.si("length")).orElse(0.0);
     Band heads = Limits.band("vent-loss-coefficient");
     Band net = full(b);
     out.put("vent-pressure-drop",
@@ -45,8 +45,8 @@ final class PressureNumbers {
   }
 
   private static void seal(Bench b, Numbers.Out out) {
-    boolean tip = Roles.receiver(b.rig).flatMap(p -> p.word("tip-below-liquid")).filter("yes"::equals).isPresent();
-    boolean hose = Roles.ventHose(b.rig).flatMap(p -> p.word("end")).filter("under-liquid"::equals).isPresent();
+    boolean tip = b.parts.receiver().flatMap(p -> p.word("tip-below-liquid")).filter("yes"::equals).isPresent();
+    boolean hose = b.parts.ventHose().flatMap(p -> p.word("end")).filter("under-liquid"::equals).isPresent();
     if (!tip && !hose) {
       out.absent("seal-back-pressure", "no tip or hose is stated to stand under liquid");
       return;

@@ -1,7 +1,6 @@
 package stillwarden.derive.physics;
 
 import java.time.Instant;
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import stillwarden.describe.Part;
@@ -12,6 +11,7 @@ import stillwarden.describe.Part;
  * @param heatLeft seconds until it boils: from heat-on before the run, 0 once boiling was seen
  * @param heatUp the whole heat-up, s
  * @param flask level of water and solids, m3
+ * @param fill the same level, to judge a fill by
  * @param reservoir m3
  * @param receiver m3 in the receiver now
  * @param collected m3 over since the start
@@ -22,6 +22,7 @@ record Progress(
     Optional<Band> heatUp,
     Optional<Instant> boilsFrom,
     Optional<Band> flask,
+    Optional<Band> fill,
     Optional<Band> reservoir,
     Optional<Band> receiver,
     Optional<Band> collected,
@@ -32,7 +33,7 @@ record Progress(
     Optional<Instant> boils = boilsFrom(b, heatUp);
     Optional<Band> wait = wait(b, heatUp);
     Optional<Band> collected = collected(b, rate, boils);
-    return new Progress(wait, heatUp, boils, flask(b, rate, boils), reservoir(b), receiver(b, rate, boils, collected), collected, leak(b, heatUp, collected));
+    return new Progress(wait, heatUp, boils, flask(b, rate, boils), fill(b, rate, boils), reservoir(b), receiver(b, rate, boils, collected), collected, Leak.suspected(b, heatUp, collected));
   }
 
   private static Optional<Band> heatUp(Bench b) {
@@ -83,7 +84,6 @@ record Progress(
   }
 
   private static Optional<Band> flask(Bench b, Optional<BoilUp> rate, Optional<Instant> boils) {
-    Optional<Band> start = b.charge.water().map(w -> Band.of(w).plus(b.charge.displaced()));
     if (b.run.flask().isPresent() && b.volume.isPresent()) {
       RunState.Look look = b.run.flask().get();
       Optional<Band> seen = look.volume().isPresent()
@@ -91,6 +91,12 @@ record Progress(
           : Levels.flask(look.word(), b.volume.get(), b.minimumLevel(b.volume.get()), b.policy);
       return seen.map(s -> s.plus(Band.of(b.run.fedSince(look.at()))).minus(boiled(b, rate, boils, look.at())).atLeast(0));
     }
+    return reckoned(b, rate, boils);
+  }
+
+  /** What was poured in and fed, less what has boiled away by the clock. */
+  private static Optional<Band> reckoned(Bench b, Optional<BoilUp> rate, Optional<Instant> boils) {
+    Optional<Band> start = b.charge.water().map(w -> Band.of(w).plus(b.charge.displaced()));
     if (!b.run.started()) {
       return start;
     }
@@ -98,9 +104,18 @@ record Progress(
     return start.map(s -> s.plus(Band.of(b.run.fed())).minus(boiled(b, rate, boils, from)).atLeast(0));
   }
 
+  /** The level to judge a fill by: a word's interval is far too wide for that, so it only bounds what is reckoned. */
+  private static Optional<Band> fill(Bench b, Optional<BoilUp> rate, Optional<Instant> boils) {
+    Optional<Band> seen = flask(b, rate, boils);
+    Optional<Band> reckoned = reckoned(b, rate, boils);
+    boolean byWord = b.run.flask().filter(l -> l.volume().isEmpty()).isPresent();
+    boolean meet = byWord && reckoned.isPresent() && seen.isPresent() && reckoned.get().low() <= seen.get().high() && reckoned.get().high() >= seen.get().low();
+    return meet ? reckoned.map(r -> r.atLeast(seen.get().low()).atMost(seen.get().high())) : seen;
+  }
+
   private static Band boiled(Bench b, Optional<BoilUp> rate, Optional<Instant> boils, Instant since) {
     double seconds = boiledSince(b, boils, since);
-    return rate.map(r -> r.cubicMetres().times(r.waterShare() * seconds)).orElse(Band.of(0));
+    return rate.map(r -> r.cubicMetres().times((b.charge.dispersed() ? r.waterShare() : 1) * seconds)).orElse(Band.of(0));
   }
 
   private static Band read(double volume, double vessel) {
@@ -109,7 +124,7 @@ record Progress(
   }
 
   private static Optional<Band> reservoir(Bench b) {
-    Optional<Part> part = Roles.reservoir(b.rig);
+    Optional<Part> part = b.parts.reservoir();
     Optional<Double> size = part.flatMap(p -> p.si("volume"));
     if (b.run.reservoir().isPresent()) {
       RunState.Look look = b.run.reservoir().get();
@@ -120,7 +135,7 @@ record Progress(
   }
 
   private static Optional<Band> receiver(Bench b, Optional<BoilUp> rate, Optional<Instant> boils, Optional<Band> collected) {
-    Optional<Double> size = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> size = b.parts.receiver().flatMap(p -> p.si("volume"));
     if (b.run.receiver().isPresent()) {
       RunState.Look look = b.run.receiver().get();
       Optional<Band> seen = look.volume().isPresent()
@@ -145,34 +160,5 @@ record Progress(
     }
     Instant from = b.run.heatSince().orElse(b.run.at());
     return rate.map(r -> r.cubicMetres().times(boiledSince(b, boils, from)).plus(Band.of(0)));
-  }
-
-  /** More water gone than the power could have boiled is a leak, a wrong entry or a wrong rig file. */
-  private static Optional<String> leak(Bench b, Optional<Band> heatUp, Optional<Band> collected) {
-    if (b.run.flask().isEmpty() || b.volume.isEmpty() || b.heat.isEmpty() || b.charge.water().isEmpty() || b.run.heatSince().isEmpty()) {
-      return Optional.empty();
-    }
-    RunState.Look look = b.run.flask().get();
-    Band error = Band.of(Limits.value("level-reading-error") * b.volume.get());
-    Optional<Band> seen = look.volume().map(Band::of).or(() -> Levels.flask(look.word(), b.volume.get(), b.minimumLevel(b.volume.get()), b.policy));
-    if (seen.isEmpty()) {
-      return Optional.empty();
-    }
-    double fed = b.run.fed() - b.run.fedSince(look.at());
-    double gone = b.charge.water().get() + b.charge.displaced().low() + fed - b.charge.uptake().high() - seen.get().high() - error.high();
-    double most = b.heat.get().full().high() * seconds(b, heatUp, look.at()) / WaterSteam.latentHeat(b.boiling()) / WaterSteam.BOILING_DENSITY;
-    if (gone <= most) {
-      return Optional.empty();
-    }
-    List<String> why = new ArrayList<>();
-    boolean cameOver = collected.filter(c -> !b.run.collected().isEmpty() && c.high() >= Limits.value("came-over-share") * gone).isPresent();
-    why.add(String.format(java.util.Locale.ROOT, "%.0f mL are gone from the flask, the heater could have boiled at most %.0f mL", gone * 1e6, most * 1e6));
-    why.add(cameOver ? "as much came over: the power in the rig file or the time of heat-on is wrong" : "not in the receiver: a leak or a wrong entry");
-    return Optional.of(String.join("; ", why));
-  }
-
-  private static double seconds(Bench b, Optional<Band> heatUp, Instant look) {
-    Instant start = b.run.boilingSince().orElseGet(() -> b.run.heatSince().get().plusMillis((long) (1000 * heatUp.map(Band::low).orElse(0.0))));
-    return Math.max(0, (look.toEpochMilli() - start.toEpochMilli()) / 1000.0);
   }
 }

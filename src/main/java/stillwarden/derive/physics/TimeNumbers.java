@@ -75,17 +75,17 @@ final class TimeNumbers {
       noHeat("feed-limit");
       return;
     }
-    double from = Roles.reservoir(b.rig).flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
+    double from = b.parts.reservoir().flatMap(p -> p.si("temperature")).orElseGet(() -> Limits.value("feed-temperature"));
     double perCubicMetre = WaterSteam.COLD_DENSITY * WaterSteam.warming(from, b.boiling());
     out.put("feed-limit", net.get().times(Limits.value("feed-share") / perCubicMetre), "feed that takes a quarter of the net heat", "PRACTICE; IAPWS-IF97", notes());
   }
 
   private void fill() {
-    if (b.volume.isEmpty() || now.flask().isEmpty()) {
+    if (b.volume.isEmpty() || now.fill().isEmpty()) {
       out.absent("flask-fill", "flask volume or water not stated", "flask.volume", "charge.water");
       return;
     }
-    out.put("flask-fill", now.flask().get().times(1 / b.volume.get()), "water and solids over flask volume", "geometry", b.charge.notes());
+    out.put("flask-fill", now.fill().get().times(1 / b.volume.get()), "water and solids over flask volume", "geometry", b.charge.notes());
   }
 
   private void target() {
@@ -113,9 +113,14 @@ final class TimeNumbers {
   }
 
   private void receiver() {
-    Optional<Double> size = Roles.receiver(b.rig).flatMap(p -> p.si("volume"));
+    Optional<Double> size = b.parts.receiver().flatMap(p -> p.si("volume"));
     Optional<Band> room = size.flatMap(v -> now.receiver().map(r -> Band.of(v * Limits.value("receiver-full-share")).minus(r).atLeast(0)));
     time("time-to-full-receiver", room, "until the receiver is full to its limit", "receiver.volume");
+  }
+
+  /** A receiver fills, and a flask with a free oil layer falls, by all that comes over; else only the water counts. */
+  private boolean wholeDistillate(String name) {
+    return name.contains("receiver") || name.contains("target") || name.contains("minimum") && !b.charge.dispersed();
   }
 
   private void time(String name, Optional<Band> volume, String what, String... missing) {
@@ -126,7 +131,7 @@ final class TimeNumbers {
     } else if (rate.isEmpty() || now.heatLeft().isEmpty()) {
       noHeat(name);
     } else {
-      Band share = rate.get().cubicMetres().times(name.contains("receiver") || name.contains("target") ? 1 : rate.get().waterShare());
+      Band share = rate.get().cubicMetres().times(wholeDistillate(name) ? 1 : rate.get().waterShare());
       boolean none = volume.get().high() == 0;
       Band seconds = none ? Band.of(0) : volume.get().over(share).plus(now.heatLeft().get());
       List<String> notes = notes(b.run.started() ? "from now" : "from heat-on");

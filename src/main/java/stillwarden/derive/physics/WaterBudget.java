@@ -47,8 +47,8 @@ final class WaterBudget {
     }
     double minimum = b.minimumLevel(b.volume.get());
     Band level = Band.of(b.charge.water().get()).plus(b.charge.displaced());
-    Band free = level.minus(Band.of(minimum)).minus(b.charge.uptake()).atLeast(0);
-    double reservoir = Roles.reservoir(b.rig).flatMap(p -> p.si("water")).orElse(0.0);
+    Band free = level.minus(Band.of(minimum)).minus(b.charge.uptake()).atLeast(0).atMost(b.charge.water().get());
+    double reservoir = b.parts.reservoir().flatMap(p -> p.si("water")).orElse(0.0);
     return Optional.of(free.plus(Band.of(reservoir)));
   }
 

@@ -67,4 +67,11 @@ class ChargeTest {
     assertThat(c.dispersed()).isFalse();
     assertThat(c.uptake()).isEqualTo(Band.of(0));
   }
+
+  @Test
+  void aFreeOilLayerTakesItsRoomInTheFlask() { // 100 g of toluene at 862.3 kg/m3 (CRC): 116 mL
+    Charge c = Charge.of(Rigs.fennel("charge.material = -", "charge.material-mass = -", "charge.oil.expected = 100 g", "charge.oil.makeup.trans-anethole = -",
+        "charge.oil.makeup.estragole = -", "charge.oil.makeup.limonene = -", "charge.oil.makeup.toluene = 100 %"), Tree.EMPTY);
+    assertThat(c.displaced().nominal() * 1e6).isCloseTo(116, offset(0.1));
+  }
 }

@@ -79,7 +79,7 @@ class PhysicsTest {
   @Test
   void boilUpIsNetPowerOverLatentHeat() { // 100 W net boil 2.66 g/min of water (IAPWS-IF97); loss and efficiency stated
     Numbers n = plan();
-    Heat h = Heat.of(Rigs.fennel(), RunState.of(List.of(), null), 372, 294.15).orElseThrow();
+    Heat h = Heat.of(RigParts.of(Rigs.fennel()), RunState.of(List.of(), null), 372, 294.15).orElseThrow();
     assertThat(value(n, "boil-up-rate")).isCloseTo(h.net().nominal() / 100 * 2.66, offset(0.2));
   }
 
@@ -329,5 +329,13 @@ class PhysicsTest {
   @Test
   void aPlannedTimeIsATargetWhereNothingElseIs() {
     assertThat(run(30, Rigs.fennel("target.distillate = -", "target.time = 90 min"), Rigs.did(0, "heat-on", "60 %")).get("time-to-target").nominal()).isCloseTo(60, offset(0.01));
+  }
+
+  @Test
+  void aWordForTheLevelDoesNotBlowUpTheFill() { // 45 % at the start, 20 mL boiled away
+    Entry[] log = {Rigs.did(0, "heat-on", "60 %"), Rigs.saw(20, "first-drop", "yes"), Rigs.saw(25, "flask-level", "ok")};
+    Estimate fill = run(25, log).get("flask-fill");
+    assertThat(fill.high()).isLessThan(46);
+    assertThat(fill.nominal()).isBetween(40.0, 45.0);
   }
 }
