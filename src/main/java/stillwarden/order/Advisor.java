@@ -33,7 +33,8 @@ public final class Advisor {
   /** @param at the moment to judge; later lines are left out; else the latest time in the log */
   public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at) {
     try (Judge judge = Judge.forRuns()) {
-      return advise(new Ground(rig, policy), log, at, judge);
+      Instant when = at.orElseGet(() -> latest(log)).toInstant();
+      return advise(new Ground(rig, policy.asOf(Optional.of(when))), log, at, judge);
     }
   }
 

@@ -257,12 +257,13 @@ class MetamorphicTest {
     SplittableRandom r = new SplittableRandom(SEED + 6);
     for (int i = 0; i < RUNS / 8; i++) {
       List<Line> lines = Runs.draw(r, true);
+      stillwarden.derive.Ground ground = new stillwarden.derive.Ground(rig, Policy.NONE);
       try (Judge kept = Judge.forRuns()) {
         for (int n = 1; n <= lines.size(); n += n < lines.size() - 12 ? 7 : 1) {
           var log = Runs.log(lines.subList(0, n));
           Optional<java.time.OffsetDateTime> at = Optional.of(Runs.at(Runs.last(lines.subList(0, n))));
           Advice fresh = Advisor.advise(rig, Policy.NONE, log, at);
-          String live = JsonView.of(Advisor.advise(rig, Policy.NONE, log, at, kept, false));
+          String live = JsonView.of(Advisor.advise(ground, log, at, kept));
           assertThat(live).as("after %s", lines.get(n - 1)).isEqualTo(JsonView.of(fresh));
           form(fresh, Advisor.whole(rig, Policy.NONE, log, at), live);
         }
