@@ -38,7 +38,7 @@ final class Stillwarden implements Runnable {
       int code = commandLine(desk).execute(args);
       return code == 0 ? Exit.NOTHING_TO_DO : code == 1 ? Exit.SOMETHING_TO_DO : Exit.UNUSABLE;
     } catch (Throwable e) { // no stack trace ever reaches a user, whatever broke
-      return fault(desk, e);
+      return Fault.say(desk, e);
     }
   }
 
@@ -74,14 +74,7 @@ final class Stillwarden implements Runnable {
       desk.defects(u.defects());
       return Exit.UNUSABLE;
     }
-    return e instanceof ParameterException p ? usage(desk, p) : fault(desk, e);
-  }
-
-  /** The last resort: a fault of ours is said to be one, in one line, and no advice is given. */
-  private static Exit fault(Desk desk, Throwable e) {
-    String what = e.getMessage() == null ? "no further word" : e.getMessage();
-    desk.say("stillwarden: the program failed (" + what + "); this is no advice about the rig: ask a person");
-    return Exit.UNUSABLE;
+    return e instanceof ParameterException p ? usage(desk, p) : Fault.say(desk, e);
   }
 
   /** From the jar's manifest; a build that was never packaged says so. */

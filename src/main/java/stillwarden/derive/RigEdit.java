@@ -18,10 +18,10 @@ final class RigEdit {
     int dot = path.indexOf('.');
     Part part = dot < 0 ? null : rig.parts().get(path.substring(0, dot));
     if (part == null) {
-      return new Rig(rig.file(), rig.name(), rig.method(), plus(rig.facts(), path, d), rig.parts(), rig.joints(), rig.openings(), rig.digest());
+      return new Rig(rig.file(), rig.name(), rig.method(), plus(rig.facts(), path, d), rig.parts(), rig.joints(), rig.openings(), "");
     }
     Part changed = new Part(part.name(), part.kind(), plus(part.keys(), path.substring(dot + 1), d));
-    return new Rig(rig.file(), rig.name(), rig.method(), rig.facts(), plus(rig.parts(), part.name(), changed), rig.joints(), rig.openings(), rig.digest());
+    return new Rig(rig.file(), rig.name(), rig.method(), rig.facts(), plus(rig.parts(), part.name(), changed), rig.joints(), rig.openings(), "");
   }
 
   private static <T> Map<String, T> plus(Map<String, T> some, String key, T value) {

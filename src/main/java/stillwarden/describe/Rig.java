@@ -11,7 +11,7 @@ import java.util.SortedMap;
  * @param facts everything outside parts, joints and openings, by path: {@code place.elevation}, {@code charge.oil.makeup.limonene}
  * @param parts by the user's name, in file order
  * @param openings state of ports in no joint: {@code open, stoppered, capped, tube}
- * @param digest {@code sha256:...} of the resolved description
+ * @param digest {@code sha256:...} of the resolved description, or empty for the one that its content gives
  */
 public record Rig(
     String file,
@@ -22,6 +22,11 @@ public record Rig(
     List<Joint> joints,
     SortedMap<Port, Datum> openings,
     String digest) {
+
+  /** Computed when asked for: most commands never do, and a hash is slow to start. */
+  public String digest() {
+    return digest.isEmpty() ? Digest.of(method, facts, parts, joints, openings) : digest;
+  }
 
   public Optional<String> word(String path) {
     return datum(path).map(Datum::text);

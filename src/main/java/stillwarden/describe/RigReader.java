@@ -55,8 +55,7 @@ public final class RigReader {
     parts.values().forEach(p -> references(p, parts));
     String name = Optional.ofNullable(facts.get("name")).map(Datum::text).orElse(file.getFileName().toString());
     Contradictions.check(parts, joints, openings, defects);
-    return new Rig(file.toString(), name, method, Collections.unmodifiableMap(facts), Collections.unmodifiableMap(parts), joints, openings,
-        Digest.of(method, facts, parts, joints, openings));
+    return new Rig(file.toString(), name, method, Collections.unmodifiableMap(facts), Collections.unmodifiableMap(parts), joints, openings, "");
   }
 
   private Map<String, Datum> facts(Node root) {
