@@ -115,7 +115,7 @@ final class CondenserSigns {
     Optional<Entry> last = Stream.concat(
             Stream.of("coolant-running", "coolant-flow").flatMap(id -> scene.run().lastSaw(id).stream()).filter(e -> !e.text().equals(Looks.NOT_SURE)),
             scene.run().lastDid("coolant-on", "set-coolant", "coolant-start-slow", "coolant-stop", "coolant-raise").stream())
-        .max(Comparator.comparing(Entry::at).thenComparing(Entry::line));
+        .max(RunState.ORDER);
     boolean proven = scene.is(Role.CONDENSER, "coolant.flow-proven", "yes");
     boolean heldOff = scene.is(Role.CONDENSER, "coolant.plan", "held-off");
     if (last.isEmpty() && heldOff) {

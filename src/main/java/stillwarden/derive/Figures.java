@@ -69,7 +69,11 @@ final class Figures {
   }
 
   String seat(Joint j) {
-    return j.word("size").flatMap(JointFit::ofText).map(v -> v.seat().name().toLowerCase(Locale.ROOT)).orElse("");
+    return j.word("size").flatMap(JointFit::ofText).map(v -> switch (v.seat()) {
+      case SEATS -> "seats";
+      case SHORT -> "short";
+      case MISFIT -> "misfit";
+    }).orElse("");
   }
 
   String oilFreezes() {

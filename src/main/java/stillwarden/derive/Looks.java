@@ -5,8 +5,6 @@ import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
 import stillwarden.describe.Entry;
-import stillwarden.describe.Observation;
-import stillwarden.describe.Vocabulary;
 
 /** How old each look is. A look is fresh up to and including its shelf life; past twice that it counts as never made. */
 final class Looks {
@@ -73,19 +71,10 @@ final class Looks {
     }
     Entry worst = all.get(all.size() - 1);
     for (Entry e : all) {
-      if (e.at().equals(worst.at()) && badness(e) > badness(worst)) {
+      if (e.at().equals(worst.at()) && Badness.of(e) > Badness.of(worst)) {
         worst = e;
       }
     }
     return Optional.of(worst);
-  }
-
-  private static int badness(Entry e) {
-    if (e.text().equals(NOT_SURE)) {
-      // worse than calm, but one person's doubt does not undo what another has seen
-      return 1;
-    }
-    List<String> values = Vocabulary.get().observation(e.id()).map(Observation::key).map(k -> k.values()).orElse(List.of());
-    return 2 * values.indexOf(e.text());
   }
 }

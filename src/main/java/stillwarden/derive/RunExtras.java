@@ -211,7 +211,7 @@ final class RunExtras {
       return;
     }
     Optional<Entry> deed = scene.run().lastDid(deeds.keySet().stream().sorted().toArray(String[]::new));
-    Optional<Entry> last = Stream.of(look, deed).flatMap(Optional::stream).max(Comparator.comparing(Entry::at).thenComparing(Entry::line));
+    Optional<Entry> last = Stream.of(look, deed).flatMap(Optional::stream).max(RunState.ORDER);
     if (last.isPresent()) {
       String value = deeds.getOrDefault(last.get().id(), last.get().text());
       out.seen(about, "", value, scene.told(last.get()), last.get().at(), seen);

@@ -18,6 +18,11 @@ import stillwarden.describe.Entry;
  * only once they have stood for the hold time. Immutable; history is kept, nothing is averaged.
  */
 public final class RunState {
+  /** By time; at one moment deeds before looks, and of one thing the worse last, so that the order of lines says nothing. */
+  public static final Comparator<Entry> ORDER = Comparator.comparing(Entry::at).thenComparing(Entry::verb, Comparator.reverseOrder())
+      .thenComparing(Entry::id).thenComparing(Entry::part).thenComparingDouble(Badness::of).thenComparing(Entry::text).thenComparing(Entry::who)
+      .thenComparing(Entry::line);
+
   private final List<Entry> entries;
   private final Instant at;
   private final ZoneOffset offset;
@@ -55,9 +60,26 @@ public final class RunState {
         kept.add(e);
       }
     }
-    kept.sort(Comparator.comparing(Entry::at).thenComparing(Entry::line));
+    kept.sort(ORDER);
     ZoneOffset offset = kept.isEmpty() ? ZoneOffset.UTC : kept.get(kept.size() - 1).when().getOffset();
-    return new RunState(held(kept, at, hold), at, offset);
+    return new RunState(standing(held(kept, at, hold)), at, offset);
+  }
+
+  /** Somebody not being sure never clears an alarm that a look raised: it stands until the thing is seen otherwise. */
+  private static List<Entry> standing(List<Entry> sorted) {
+    Map<String, Entry> last = new HashMap<>();
+    List<Entry> out = new ArrayList<>();
+    for (Entry e : sorted) {
+      String thing = e.id() + " " + e.part();
+      boolean unsure = e.text().equals(Looks.NOT_SURE);
+      if (!unsure || last.get(thing) == null || !Badness.alarming(last.get(thing))) {
+        out.add(e);
+      }
+      if (!unsure) {
+        last.put(thing, e);
+      }
+    }
+    return List.copyOf(out);
   }
 
   /**

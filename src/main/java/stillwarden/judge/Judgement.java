@@ -10,11 +10,13 @@ import java.util.List;
  * @param notJudged rules that threw, by name: what they guard counts as the worse case
  */
 public record Judgement(List<Finding> findings, List<String> notJudged) {
-  private static final Comparator<Finding> STABLE =
+  /** Tells any two findings of one judgement apart, by what they say and on what. */
+  public static final Comparator<Finding> STABLE =
       Comparator.comparing(Finding::hazard)
           .thenComparing(Finding::rule)
           .thenComparing(Finding::under)
-          .thenComparing(f -> f.facts().toString());
+          .thenComparing(f -> f.facts().toString())
+          .thenComparing(f -> f.statements().toString());
 
   public Judgement {
     findings = sorted(findings);

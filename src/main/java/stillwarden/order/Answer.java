@@ -145,7 +145,7 @@ final class Answer {
   }
 
   private Advice.Action action(int order, Step s, boolean first, List<Step> all) {
-    String variant = s.variants.stream().findFirst().orElse("");
+    String variant = s.variants.stream().findFirst().orElseGet(() -> ownWording(s));
     List<String> cautions = new ArrayList<>();
     if (order == 1) {
       people(s, all, cautions);
@@ -164,6 +164,12 @@ final class Answer {
         because(s.reasons),
         cautions.stream().distinct().toList(),
         Wording.english().doneWhen(s.id()));
+  }
+
+  /** A deed that only one hazard asks for may be said in that hazard's own words. */
+  private static String ownWording(Step s) {
+    List<String> hazards = s.reasons.stream().map(f -> f.under().isEmpty() ? f.hazard() : f.under()).distinct().toList();
+    return hazards.size() == 1 ? hazards.get(0) : "";
   }
 
   /** Stepping back and warning ride on the first deed, so that they delay nothing. */

@@ -5,13 +5,14 @@ import java.util.Collection;
 import java.util.Comparator;
 import java.util.HashMap;
 import java.util.HashSet;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.function.ToDoubleFunction;
 import java.util.function.ToIntFunction;
 import stillwarden.judge.Finding;
+import stillwarden.judge.Judgement;
 import stillwarden.judge.Statement;
 
 /**
@@ -39,7 +40,8 @@ final class Arrange {
     this.walking = walking;
   }
 
-  Plan arrange(List<Finding> active) {
+  Plan arrange(List<Finding> given) {
+    List<Finding> active = given.stream().sorted(Judgement.STABLE).toList();
     Map<String, Step> steps = merged(active);
     Bans bans = Bans.of(active);
     // first the bans: a barred deed must not take a weaker one with it; then again, for what waited for the weaker one
@@ -55,7 +57,7 @@ final class Arrange {
   }
 
   private static Map<String, Step> merged(List<Finding> active) {
-    Map<String, Step> out = new LinkedHashMap<>();
+    Map<String, Step> out = new TreeMap<>();
     for (Finding f : active) {
       for (Statement s : f.statements()) {
         if (s instanceof Statement.Propose p) {
@@ -100,7 +102,7 @@ final class Arrange {
       // the leisurely order of a planned end gives way once a hazard asks for an energy cut
       boolean givesWay = alarm && Hazards.of(f.hazard()).end();
       for (Statement s : f.statements()) {
-        if (s instanceof Statement.Before b && !givesWay && !holdsUp(b, bars)) {
+        if (s instanceof Statement.Before b && !givesWay && !holdsUp(b, bans)) {
           link(steps, b.first(), b.then(), out);
         }
       }
@@ -110,9 +112,8 @@ final class Arrange {
   }
 
   /** What itself has to wait never holds back an energy cut. */
-  private static boolean holdsUp(Statement.Before b, Map<String, Bar> bars) {
-    boolean cut = Deeds.ids().contains(b.then()) && Deeds.of(b.then()).cut();
-    return cut && bars.containsKey(b.first()) && !bars.get(b.first()).until().isEmpty();
+  private static boolean holdsUp(Statement.Before b, Bans bans) {
+    return Deeds.ids().contains(b.then()) && Deeds.of(b.then()).cut() && bans.waits(b.first());
   }
 
   private static boolean cuts(Finding f) {

@@ -63,6 +63,11 @@ final class Bans {
     return bars.values();
   }
 
+  /** Banned until something else is done or seen. */
+  boolean waits(String deed) {
+    return bars.containsKey(deed) && !bars.get(deed).plain();
+  }
+
   /** By the gravest signal word behind a ban, then by what the deed itself can do ({@code @deadliest} in rules/groups.yaml). */
   List<Bar> deadliestFirst() {
     List<String> deadliest = Deeds.group("@deadliest");
