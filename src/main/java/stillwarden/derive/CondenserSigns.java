@@ -46,7 +46,8 @@ final class CondenserSigns {
   private void freezing() {
     String freezes = scene.numbers().oilFreezes();
     if (freezes.isEmpty()) {
-      out.unknown("oil-freezes", "yes", "what freezes, and at what coolant temperature, is not known", scene.name(Role.CONDENSER) + ".coolant.supply", "charge.plant");
+      out.unknown("oil-freezes", "yes", "what freezes, and at what coolant temperature, is not known", scene.rig().datum(scene.name(Role.CONDENSER) + ".coolant.supply").isEmpty() ? scene.name(Role.CONDENSER) + ".coolant.supply"
+          : scene.rig().datum("charge.plant").isEmpty() ? "charge.plant" : "charge.oil.melting-point");
     } else {
       out.seen("oil-freezes", "", freezes, scene.numbers().oilFreezesWhy(), null, "condenser-solids");
     }
@@ -54,7 +55,7 @@ final class CondenserSigns {
     if (takeOff.isEmpty()) {
       out.possible("oil-freezes-in-take-off", "room temperature or oil not known", "place.room", "charge.plant");
     } else {
-      out.seen("oil-freezes-in-take-off", takeOff, scene.numbers().oilFreezesWhy());
+      out.seen("oil-freezes-in-take-off", "", takeOff, scene.numbers().takeOffWhy(), null, "place.room");
     }
   }
 

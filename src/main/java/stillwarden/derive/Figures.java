@@ -101,6 +101,11 @@ final class Figures {
     return now + inlet().map(i -> String.format(Locale.ROOT, ", coolant enters at %.0f °C, computed", i - 273.15)).orElse("");
   }
 
+  String takeOffWhy() {
+    return facts.liquidusHighest().map(l -> String.format(Locale.ROOT, "along the run the oil begins to freeze at up to %.0f °C", l.high() - 273.15)).orElse("the oil's freezing point is not known")
+        + rig.datum("place.room").map(d -> ", the room has " + d.text().replace(" Cel", " °C")).orElse("");
+  }
+
   String freezesInTakeOff() {
     if (rig.datum("place.room").isEmpty() && run.lastSaw("room-temperature").isEmpty()) {
       return "";
@@ -228,7 +233,10 @@ final class Figures {
       case "flask-fill" -> out.add(String.format(Locale.ROOT, "flask fill %.0f %% against %.0f %%, computed", numbers.get("flask-fill").nominal(), facts.fillLimit().orElse(0.0) * 100));
       case "condenser-margin" -> out.add(String.format(Locale.ROOT, "condenser duty %.0f W against %.0f W capacity, margin %.0f %%, computed",
           numbers.get("condenser-duty").nominal(), numbers.get("condenser-capacity").nominal(), facts.condenser().map(c -> c.margin() * 100).orElse(0.0)));
-      case "coolant-strategy" -> facts.coolant().ifPresent(c -> out.addAll(c.reasons()));
+      case "coolant-strategy" -> {
+        facts.coolant().ifPresent(c -> out.addAll(c.reasons()));
+        policy.coolant().filter(c -> out.stream().noneMatch(r -> r.contains("policy"))).ifPresent(c -> out.add("the site's policy: coolant " + c));
+      }
       case "water-budget" -> out.add(facts.waterBudget().map(SideFacts.Shortage::what).orElse("enough water, computed"));
       case "mantle-fit" -> out.add(facts.mantle().map(SideFacts.Fit::why).orElse("mantle fit not known"));
       case "oil-immiscible" -> out.add(facts.immiscible().map(Immiscibility::reason).orElse("solubility of the oil not known"));

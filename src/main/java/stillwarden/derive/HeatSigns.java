@@ -119,8 +119,8 @@ final class HeatSigns {
 
   private void quenched(Timeline t) {
     Optional<Entry> last = scene.run().lastSaw("boiling");
-    boolean before = t.boilStart().isPresent() && last.filter(e -> e.at().isAfter(t.boilStart().get())).isPresent()
-        && (t.firstDrop().isPresent() || scene.run().saw("boiling").stream().anyMatch(e -> Set.of("gentle", "steady", "violent").contains(e.text())));
+    boolean before = last.isPresent() && (t.firstDrop().filter(d -> d.isBefore(last.get().at())).isPresent()
+        || scene.run().saw("boiling").stream().anyMatch(e -> Set.of("gentle", "steady", "violent").contains(e.text()) && !e.at().isAfter(last.get().at()) && !e.at().isBefore(t.heatOn().orElse(e.at()))));
     boolean none = last.filter(e -> e.text().equals("none")).isPresent();
     boolean heat = t.cut().isEmpty() || backUnisolated();
     if (none && before && heat) {

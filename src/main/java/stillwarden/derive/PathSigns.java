@@ -84,10 +84,11 @@ final class PathSigns {
     Optional<String> value = lastFlow.map(this::flowWord);
     // a drip seen to have stopped stands until it is seen again; a drip seen running does not
     if (value.isPresent() && (sure || !FLOWS.contains(value.get()))) {
-      if (!value.get().equals("none") || scene.time().vapour(scene.at())) {
+      boolean expected = scene.time().vapour(scene.at()) && !boiledDry();
+      if (!value.get().equals("none") || expected) {
         out.seen("flow", "", value.get(), scene.told(lastFlow.get()), lastFlow.get().at(), "drip");
       }
-      return new Flow(value.get(), true);
+      return new Flow(value.get().equals("none") && !expected ? "none-expected" : value.get(), true);
     }
     if (!scene.time().vapour(scene.at()) || scene.time().firstDrop().isEmpty() && !warmUpOver()) {
       return new Flow("none-expected", true);
@@ -100,6 +101,13 @@ final class PathSigns {
     }
     out.possible("flow", old + ", too old", "drip");
     return new Flow("unknown", false);
+  }
+
+  /** A flask that is dry, or has stopped boiling, sends nothing over: that says nothing about the way out. */
+  private boolean boiledDry() {
+    boolean dry = scene.run().sawValue("flask-level", "dry") || scene.run().sawValue("solids", "bare");
+    boolean quiet = scene.time().cut().isPresent() && scene.run().sawValue("boiling", "none");
+    return dry || quiet;
   }
 
   private boolean warmUpOver() {
@@ -144,6 +152,10 @@ final class PathSigns {
 
   private void unseen(Flow flow, String old) {
     boolean flows = FLOWS.contains(flow.value());
+    if (flow.value().equals("none-expected") && (!scene.time().vapour(scene.at()) || boiledDry()) && pathLook.word().isPresent()) {
+      out.possible("path", "", List.of("open", "not-proven"), old + ", past its time; no vapour is being made", List.of("path"));
+      return;
+    }
     boolean overdue = pathLook.age() == Looks.Age.OVERDUE;
     if (flows || !overdue && !flow.value().equals("none") && !flow.value().equals("slowing")) {
       out.counted("path", "not-proven", old + ", past its time; " + (flows ? "something still comes over" : "no sign against it") + ": counts as not proven", "path");

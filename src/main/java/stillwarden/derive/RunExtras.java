@@ -97,7 +97,10 @@ final class RunExtras {
   private void dripOverdue() {
     boolean boiling = active("boiling", "gentle", "steady", "violent");
     Optional<Entry> drip = scene.run().lastSaw("drip");
-    boolean dry = drip.filter(e -> e.text().equals("none")).isPresent();
+    // a dry tip before there was vapour says nothing, and a drop seen since answers it
+    Instant vapourFrom = scene.time().boilStart().orElse(Instant.MAX);
+    boolean since = drip.isPresent() && Stream.of("first-drop", "drip-rate").flatMap(id -> scene.run().lastSaw(id).stream()).anyMatch(e -> !e.at().isBefore(drip.get().at()));
+    boolean dry = drip.filter(e -> e.text().equals("none") && !e.at().isBefore(vapourFrom)).isPresent() && !since;
     if (boiling && drip.filter(e -> e.text().equals(Looks.NOT_SURE)).isPresent()) {
       out.possible("drip-overdue", scene.told(drip.get()), "drip");
       return;

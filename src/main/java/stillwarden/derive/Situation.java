@@ -98,8 +98,9 @@ public record Situation(
     out.seen("over-check", over ? "yes" : "no", over ? late.get().evidence() : "every look that matters is fresh");
   }
 
-  private static final List<String> LOOKS =
-      List.of("path", "flask-level", "tip", "coolant", "vapour-out", "foam", "hood", "flow", "reservoir-level", "receiver-level", "crystals");
+  /** Signs of looks that matter: one past its time keeps a run from being calm. */
+  public static final List<String> LOOKS =
+      List.of("path", "flask-level", "tip", "coolant", "vapour-out", "hood", "flow", "reservoir-level", "receiver-level", "crystals");
 
   /** The signs about one thing. */
   public List<Sign> about(String about) {

@@ -35,6 +35,8 @@ final class WaterSigns {
     Optional<String> word = l.entry().flatMap(e -> levelWord(Role.FLASK, e));
     if (bare.isPresent() && l.entry().filter(e -> e.at().isAfter(bare.get().at())).isEmpty()) {
       out.seen("flask-level", "", "dry", scene.told(bare.get()), bare.get().at(), "flask-level");
+    } else if (word.filter(w -> w.equals("ok") || w.equals("full")).isPresent() && l.fresh() && shortOfTime()) {
+      out.seen("flask-level", "", "low", scene.told(l.entry().get()) + ", and less than " + scene.limitTime("time-to-minimum-min").toMinutes() + " min to the minimum level, computed", l.entry().get().at(), "flask-level");
     } else if (word.isPresent() && (l.fresh() || Set.of("low", "nearly-dry", "dry").contains(word.get()) && !(l.age() == Looks.Age.OVERDUE && !longAway()))) {
       out.seen("flask-level", "", word.get(), scene.told(l.entry().get()), since("flask-level", Role.FLASK, word.get()), "flask-level");
     } else if (l.fresh() && l.entry().isEmpty()) {
@@ -44,11 +46,17 @@ final class WaterSigns {
     }
   }
 
+  /** Heat is on and the minimum level is near by time, whatever the word for the level. */
+  private boolean shortOfTime() {
+    return scene.time().vapour(scene.at()) && scene.time().cut().isEmpty()
+        && scene.low("time-to-minimum-level").filter(t -> t.compareTo(scene.limitTime("time-to-minimum-min")) < 0).isPresent();
+  }
+
   private Instant statedAtHeatOn(String path) {
     return scene.rig().datum(path).isPresent() ? scene.time().heatOn().orElse(null) : null;
   }
 
-  /** Low while the computed time to the minimum exceeds the check interval, then dry. */
+  /** Low while the computed time to the minimum is not over, then dry. */
   private void unseen(Looks.Look l) {
     String old = l.entry().map(scene::told).orElse("nobody has looked at the level since heat came on");
     if (!scene.time().vapour(scene.at()) || l.age() == Looks.Age.STALE && l.entry().isPresent() && longAway()) {
@@ -63,12 +71,7 @@ final class WaterSigns {
   }
 
   private boolean longAway() {
-    return scene.low("time-to-minimum-level").filter(t -> t.compareTo(checkEvery()) > 0).isPresent();
-  }
-
-  private Duration checkEvery() {
-    Duration limit = scene.limitTime("check-every");
-    return scene.rig().si("target.check-every").map(s -> Duration.ofMillis(Math.round(s * 1000))).filter(d -> d.compareTo(limit) < 0).orElse(limit);
+    return scene.low("time-to-minimum-level").filter(t -> !t.isZero() && !t.isNegative()).isPresent();
   }
 
   private Instant since(String id, Role role, String word) {

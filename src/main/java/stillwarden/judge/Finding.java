@@ -83,6 +83,13 @@ public record Finding(
     return new Finding(rule, hazard, standing.weaker(other.standing()), List.copyOf(all), statements, root, other.signal(), other.urgency());
   }
 
+  /** With another finding's facts among the reasons; signal word and urgency stay its own. */
+  public Finding knowing(Finding other) {
+    List<Sign> all = new ArrayList<>(facts);
+    other.facts().stream().filter(f -> !all.contains(f)).forEach(all::add);
+    return new Finding(rule, hazard, standing.weaker(other.standing()), List.copyOf(all), statements, under, signal, urgency);
+  }
+
   /** Only its plain bans: a set-up hazard mended cold still forbids. */
   public Finding bansOnly() {
     List<Statement> bans = statements.stream().filter(s -> s instanceof Statement.Forbid).toList();

@@ -5,6 +5,7 @@ import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
 import java.time.format.DateTimeParseException;
 import java.util.Comparator;
+import java.util.List;
 import java.util.Optional;
 import stillwarden.derive.Ground;
 import stillwarden.derive.Situation;
@@ -27,7 +28,7 @@ public final class Advisor {
     Policy inForce = policy.asOf(when.map(OffsetDateTime::toInstant));
     Situation s = Situation.inspection(rig, inForce, when.map(OffsetDateTime::toInstant), when.map(OffsetDateTime::getOffset).orElse(ZoneOffset.UTC));
     Judgement j = Judge.once(Judge.forInspection(), s.signs());
-    return new Answer(s, j, when, true).advice(java.util.List.of());
+    return new Answer(s, j, when, true).advice(List.of());
   }
 
   /** @param at the moment to judge; later lines are left out; else the latest time in the log */
@@ -52,7 +53,7 @@ public final class Advisor {
     OffsetDateTime when = at.orElseGet(() -> latest(log));
     Situation s = Situation.run(ground, log.entries(), when.toInstant(), when.getOffset());
     Judgement j = judge.judge(SetupFaults.with(s, judge.judge(s.signs())));
-    return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(log.leftOut());
+    return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(until(log.leftOut(), when));
   }
 
   /** Why the rules of one hazard spoke or kept quiet. */
@@ -68,6 +69,11 @@ public final class Advisor {
   /** The facts of a run at one moment, for those who judge by other means (tests, audits). */
   public static Situation situation(Rig rig, Policy policy, RunLog log, OffsetDateTime when) {
     return Situation.run(rig, policy.asOf(Optional.of(when.toInstant())), log.entries(), when.toInstant(), when.getOffset());
+  }
+
+  /** Lines of a later moment are not yet there. */
+  private static List<RunLog.LeftOut> until(List<RunLog.LeftOut> leftOut, OffsetDateTime when) {
+    return leftOut.stream().filter(l -> time(l.at()).filter(t -> t.isAfter(when)).isEmpty()).toList();
   }
 
   private static OffsetDateTime latest(RunLog log) {

@@ -57,6 +57,10 @@ final class Progress {
 
   /** Deeds done for a finding longer ago than its sign should take to clear. */
   List<String> triedInVain(Finding f) {
+    if (Hazards.of(f.hazard()).principle() || Hazards.of(f.hazard()).end() || since(f).equals(Instant.MIN)) {
+      // a principle has no sign of its own to clear, and what always was so was not answered by a deed
+      return List.of();
+    }
     Duration allowed = Hazards.speaking(f).clearsWithin();
     List<String> out = new ArrayList<>();
     for (String action : proposed(f)) {

@@ -101,7 +101,7 @@ final class Questions {
   private void overdueLooks() {
     if (situation.time().live()) {
       for (Sign s : situation.signs()) {
-        if (s.standing() == Standing.COUNTED && Knowledge.section("words").get("log").get("saw").has(first(s.looks()))) {
+        if ((s.standing() == Standing.COUNTED || s.standing() == Standing.POSSIBLE && Situation.LOOKS.contains(s.about())) && Knowledge.section("words").get("log").get("saw").has(first(s.looks()))) {
           asked.computeIfAbsent(first(s.looks()), k -> new Asked()).counted = true;
         }
       }

@@ -62,11 +62,19 @@ public final class TextView {
 
   private String firstThing() {
     // in set-up the verdict itself says "not yet": what comes first is the first thing that would change it
-    Optional<Advice.Action> first = advice.actions().stream().filter(this::changesIt).findFirst();
+    List<Advice.Action> due = advice.actions().stream().filter(this::changesIt).toList();
+    Optional<Advice.Action> first = advice.verdict().equals("not-yet") ? gravest(due) : due.stream().findFirst();
+    if (first.isPresent() && first.get().state().equals("confirm")) {
+      return "look whether it is done: " + first.get().doneWhen() + ".";
+    }
     if (first.isPresent()) {
       return conditional(first.get());
     }
     return advice.ask().isEmpty() ? "nothing is due." : advice.ask().get(0).say();
+  }
+
+  private static Optional<Advice.Action> gravest(List<Advice.Action> due) {
+    return List.of("DANGER", "WARNING", "CAUTION").stream().flatMap(word -> due.stream().filter(a -> a.signal().equals(word))).findFirst();
   }
 
   private boolean changesIt(Advice.Action a) {
