@@ -17,7 +17,7 @@ import org.junit.jupiter.api.Test;
 /** The order of the packages, and what each may touch. */
 class ArchitectureTest {
   /** From the left to the right; a package may use only those on its left. */
-  private static final List<String> CHAIN = List.of("describe", "derive", "judge", "order", "show", "cli");
+  private static final List<String> CHAIN = List.of("describe", "derive", "judge", "order", "show", "watch", "cli");
 
   /** What the rule compiler makes of the rule text; the judge alone loads it. */
   private static final List<String> COMPILED_RULES = List.of("inspect", "live");
@@ -46,8 +46,14 @@ class ArchitectureTest {
   @Test
   void onlyTheJudgeSeesTheRuleEngine() {
     noClasses().that().resideInAnyPackage("stillwarden.describe..", "stillwarden.derive..", "stillwarden.order..", "stillwarden.show..",
-            "stillwarden.cli..")
+            "stillwarden.watch..", "stillwarden.cli..")
         .should().dependOnClassesThat().resideInAnyPackage("org.drools..", "org.kie..").check(OURS);
+  }
+
+  /** A live run needs describe, derive, judge and order; how an answer looks is nothing to it. */
+  @Test
+  void aLiveRunShowsNothing() {
+    noClasses().that().resideInAPackage("stillwarden.watch..").should().dependOnClassesThat().resideInAPackage("stillwarden.show..").check(OURS);
   }
 
   @Test

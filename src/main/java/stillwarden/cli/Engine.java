@@ -27,6 +27,9 @@ interface Engine {
 
   Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at);
 
+  /** @param name what the log is called in messages */
+  Live live(Rig rig, Policy policy, String name);
+
   Explanation explain(String hazard, Rig rig, Policy policy, Optional<RunLog> log, Optional<OffsetDateTime> at);
 
   PlanSheet plan(Rig rig, Policy policy, Optional<OffsetDateTime> at) throws Unusable;

@@ -1,7 +1,5 @@
 package stillwarden.cli;
 
-import java.io.ByteArrayInputStream;
-import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -11,7 +9,6 @@ import java.util.Optional;
 import stillwarden.describe.Defect;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Rig;
-import stillwarden.describe.RunLog;
 import stillwarden.describe.Spot;
 import stillwarden.describe.Unusable;
 import stillwarden.order.Advice;
@@ -27,7 +24,6 @@ final class Follow {
   private final Rig rig;
   private final Policy policy;
   private final boolean json;
-  private final ByteArrayOutputStream text = new ByteArrayOutputStream();
   private Optional<Advice> last = Optional.empty();
   private List<Defect> unusable = List.of();
 
@@ -40,11 +36,11 @@ final class Follow {
 
   /** Until the input ends; a file never does. A log without one usable line by then is unusable. */
   Exit run(String log) throws IOException, InterruptedException, Unusable {
-    try (Lines lines = open(log)) {
+    try (Lines lines = open(log); Live live = desk.engine().live(rig, policy, log)) {
       Lines.News news;
       do {
         news = lines.next();
-        take(log, news);
+        take(live, news);
       } while (news.open());
     }
     if (last.isEmpty()) {
@@ -63,26 +59,20 @@ final class Follow {
     return Lines.growing(Path.of(log));
   }
 
-  private void take(String log, Lines.News news) {
-    text.writeBytes(news.text());
+  private void take(Live live, Lines.News news) {
     boolean silent = news.text().length == 0;
     if (!silent || news.open() || last.isEmpty()) {
-      judge(log, silent && news.open() ? Optional.of(OffsetDateTime.now(desk.clock())) : Optional.empty());
+      judge(live, news.text(), silent && news.open() ? Optional.of(OffsetDateTime.now(desk.clock())) : Optional.empty());
     }
   }
 
-  private void judge(String name, Optional<OffsetDateTime> at) {
+  private void judge(Live live, byte[] text, Optional<OffsetDateTime> at) {
     try {
-      RunLog log = desk.engine().log(new ByteArrayInputStream(text.toByteArray()), name);
-      show(desk.engine().advise(rig, policy, log, notBefore(at, log)));
+      live.hear(text);
+      show(live.answer(at));
     } catch (Unusable u) {
       unusable = u.defects(); // the first usable line may still come
     }
-  }
-
-  /** A machine whose clock is behind the log's must not make the log's last lines vanish. */
-  private static Optional<OffsetDateTime> notBefore(Optional<OffsetDateTime> at, RunLog log) {
-    return at.filter(now -> log.entries().stream().noneMatch(e -> e.at().isAfter(now.toInstant())));
   }
 
   private void show(Advice now) {

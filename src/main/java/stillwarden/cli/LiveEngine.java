@@ -51,6 +51,11 @@ final class LiveEngine implements Engine {
   }
 
   @Override
+  public Live live(Rig rig, Policy policy, String name) {
+    return new LiveRun(rig, policy, name);
+  }
+
+  @Override
   public Explanation explain(String hazard, Rig rig, Policy policy, Optional<RunLog> log, Optional<OffsetDateTime> at) {
     return Advisor.explain(hazard, rig, policy, log, at);
   }

@@ -142,7 +142,7 @@ final class HeatSigns {
     boolean stated = !bath && scene.word(Role.HEATER, "liquid-inside").filter(w -> !w.equals("no")).isPresent();
     boolean wet = seen.isPresent() || stated;
     if (wet && !dead) {
-      out.seen("heater-live-wet", "", "yes", seen.map(scene::told).orElse("liquid in the heater, by the rig file"), seen.map(Entry::at).orElse(null), "heater-wet");
+      out.seen("heater-live-wet", "", "yes", seen.map(scene::told).orElse("liquid in the heater, by the rig file"), seen.map(Entry::at).orElse(null), seen.isPresent() ? "heater-wet" : scene.name(Role.HEATER) + ".liquid-inside");
     } else if (!bath && seen.isEmpty() && !scene.time().live() && scene.key(Role.HEATER, "liquid-inside").isEmpty() && !scene.roles().absent().contains(Role.HEATER)) {
       out.possible("heater-live-wet", "nobody has looked into the heater", scene.name(Role.HEATER) + ".liquid-inside");
     } else {

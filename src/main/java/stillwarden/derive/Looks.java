@@ -82,9 +82,10 @@ final class Looks {
 
   private static int badness(Entry e) {
     if (e.text().equals(NOT_SURE)) {
-      return Integer.MAX_VALUE;
+      // worse than calm, but one person's doubt does not undo what another has seen
+      return 1;
     }
     List<String> values = Vocabulary.get().observation(e.id()).map(Observation::key).map(k -> k.values()).orElse(List.of());
-    return values.indexOf(e.text());
+    return 2 * values.indexOf(e.text());
   }
 }

@@ -65,7 +65,7 @@ final class PathSigns {
   }
 
   PathFinding make() {
-    PathFinding graph = VapourPath.find(scene.rig(), seenState());
+    PathFinding graph = scene.ground().path(seenState());
     Flow flow = flow();
     path(graph, flow);
     pressure();

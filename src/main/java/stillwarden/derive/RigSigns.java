@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import stillwarden.describe.Datum;
+import stillwarden.describe.Entry;
 import stillwarden.describe.Key;
 import stillwarden.describe.Part;
 import stillwarden.describe.Tree;
@@ -85,7 +86,7 @@ final class RigSigns {
     String about = role.word() + "." + key.path();
     String look = p.name() + "." + key.path();
     Datum d = p.keys().get(key.path());
-    Optional<stillwarden.describe.Entry> flows = scene.run().lastSaw("coolant-running").filter(e -> e.text().equals("yes"));
+    Optional<Entry> flows = flows(scene);
     if (about.equals("condenser.coolant.flow-proven") && flows.isPresent()) {
       out.seen(about, p.name(), "yes", scene.told(flows.get()), null, look);
     } else if (d != null) {
@@ -93,6 +94,15 @@ final class RigSigns {
     } else {
       out.possible(about, p.name(), key.values(), look + " is not stated", List.of(look));
     }
+  }
+
+  private static Optional<Entry> flows(Scene scene) {
+    return scene.run().lastSaw("coolant-running").filter(e -> e.text().equals("yes"));
+  }
+
+  /** All of a moment that these signs and those of {@link SetupSigns} depend on; the rest is the rig file. */
+  static Object madeFrom(Scene scene) {
+    return List.of(scene.live(), flows(scene), scene.offset());
   }
 
   private void missingParts() {

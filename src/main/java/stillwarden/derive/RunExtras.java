@@ -210,7 +210,7 @@ final class RunExtras {
       out.possible(about, scene.told(scene.run().lastSaw(seen).get()), seen);
       return;
     }
-    Optional<Entry> deed = scene.run().lastDid(deeds.keySet().toArray(String[]::new));
+    Optional<Entry> deed = scene.run().lastDid(deeds.keySet().stream().sorted().toArray(String[]::new));
     Optional<Entry> last = Stream.of(look, deed).flatMap(Optional::stream).max(Comparator.comparing(Entry::at).thenComparing(Entry::line));
     if (last.isPresent()) {
       String value = deeds.getOrDefault(last.get().id(), last.get().text());

@@ -16,8 +16,20 @@ import stillwarden.describe.Tree;
 
 
 /** Everything that the sign makers look at, gathered once for one moment. */
-record Scene(Rig rig, Policy policy, RunState run, Roles roles, Figures numbers, Timeline time, Looks looks) {
+record Scene(Ground ground, RunState run, Figures numbers, Timeline time, Looks looks) {
   private static final DateTimeFormatter CLOCK = DateTimeFormatter.ofPattern("HH:mm:ss");
+
+  Rig rig() {
+    return ground.rig();
+  }
+
+  Policy policy() {
+    return ground.policy();
+  }
+
+  Roles roles() {
+    return ground.roles();
+  }
 
   boolean live() {
     return time.live();
@@ -29,7 +41,7 @@ record Scene(Rig rig, Policy policy, RunState run, Roles roles, Figures numbers,
 
   /** A part's key by role: {@code flask.cracks} of the one flask there is. */
   Optional<Datum> key(Role role, String key) {
-    return roles.one(role).flatMap(p -> Optional.ofNullable(p.keys().get(key)));
+    return roles().one(role).flatMap(p -> Optional.ofNullable(p.keys().get(key)));
   }
 
   Optional<String> word(Role role, String key) {
@@ -37,7 +49,7 @@ record Scene(Rig rig, Policy policy, RunState run, Roles roles, Figures numbers,
   }
 
   Optional<Double> si(Role role, String key) {
-    return roles.one(role).flatMap(p -> p.si(key));
+    return roles().one(role).flatMap(p -> p.si(key));
   }
 
   boolean is(Role role, String key, String value) {
@@ -45,21 +57,21 @@ record Scene(Rig rig, Policy policy, RunState run, Roles roles, Figures numbers,
   }
 
   boolean says(String path, String value) {
-    return rig.word(path).filter(value::equals).isPresent();
+    return rig().word(path).filter(value::equals).isPresent();
   }
 
   /** The user's name of a role's part, or the name that a question uses while there is none. */
   String name(Role role) {
-    return roles.one(role).map(Part::name).orElseGet(() -> RigSigns.usualName(role));
+    return roles().one(role).map(Part::name).orElseGet(() -> RigSigns.usualName(role));
   }
 
   /** The plant list's entry for the charge. */
   Tree plant() {
-    return rig.word("charge.plant").map(p -> Knowledge.section("plants").get(p)).orElse(Tree.EMPTY);
+    return rig().word("charge.plant").map(p -> Knowledge.section("plants").get(p)).orElse(Tree.EMPTY);
   }
 
   double limit(String id) {
-    return Limits.of(policy, id);
+    return Limits.of(policy(), id);
   }
 
   Duration limitTime(String id) {
@@ -107,7 +119,7 @@ record Scene(Rig rig, Policy policy, RunState run, Roles roles, Figures numbers,
 
   /** {@code flask.cracks no, by the rig file (nk)}. */
   String stated(Datum d) {
-    return d.path() + " " + d.text() + ", by the rig file" + rig.word("seen.by").map(w -> " (" + w + ")").orElse("");
+    return d.path() + " " + d.text() + ", by the rig file" + rig().word("seen.by").map(w -> " (" + w + ")").orElse("");
   }
 
   Map<String, Estimate> allNumbers() {

@@ -14,10 +14,10 @@ import stillwarden.describe.Vocabulary;
 /** More set-up signs: what feeds and carries the heater, what the charge is known for, people's protection, the thermometer's port. */
 final class SetupExtras {
   private static final Map<String, String> PROTECTION =
-      Map.of("people.goggles", "goggles", "people.heat-gloves", "heat gloves", "people.lab-coat", "lab coat", "people.closed-shoes", "closed shoes");
-  private static final Map<String, String> EMERGENCY = new LinkedHashMap<>(Map.of(
+      inOrder("people.goggles", "goggles", "people.heat-gloves", "heat gloves", "people.lab-coat", "lab coat", "people.closed-shoes", "closed shoes");
+  private static final Map<String, String> EMERGENCY = inOrder(
       "emergency.exit-clear", "exit", "emergency.eyewash-within-10-s", "eyewash", "emergency.extinguisher-within-reach", "extinguisher",
-      "emergency.spill-kit", "spill kit", "emergency.power-off-within-reach", "cut-off"));
+      "emergency.spill-kit", "spill kit", "emergency.power-off-within-reach", "cut-off");
 
   private final Scene scene;
   private final SignSet out;
@@ -25,6 +25,15 @@ final class SetupExtras {
   SetupExtras(Scene scene, SignSet out) {
     this.scene = scene;
     this.out = out;
+  }
+
+  /** {@code Map.of} has an order of its own in every process, and the same input must give the same bytes. */
+  private static Map<String, String> inOrder(String... keysAndWords) {
+    Map<String, String> out = new LinkedHashMap<>();
+    for (int i = 0; i < keysAndWords.length; i += 2) {
+      out.put(keysAndWords[i], keysAndWords[i + 1]);
+    }
+    return out;
   }
 
   void make() {
@@ -76,8 +85,15 @@ final class SetupExtras {
     } else if (fed || regulator) {
       out.seen("heater-controlled", name, "yes", name + " is fed through a regulator, by the rig file", null, look);
     } else {
-      out.possible("heater-controlled", name, SignSet.domain("heater-controlled"), look + " is not stated", List.of(look));
+      out.possible("heater-controlled", name, SignSet.domain("heater-controlled"), "what feeds " + name + " is not stated", List.of(regulatorLook(look)));
     }
+  }
+
+  /** Whether there is a regulator, then what it feeds, then what the heater is fed from. */
+  private String regulatorLook(String fedFrom) {
+    boolean none = scene.roles().all(Role.REGULATOR).isEmpty();
+    boolean open = none && !scene.roles().absent().contains(Role.REGULATOR) && !scene.rig().nothingElse();
+    return open ? RigSigns.usualName(Role.REGULATOR) + ".kind" : none ? fedFrom : scene.roles().all(Role.REGULATOR).get(0).name() + ".feeds";
   }
 
   private void charge() {

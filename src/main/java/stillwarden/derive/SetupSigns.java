@@ -176,6 +176,10 @@ final class SetupSigns {
       return;
     }
     Part jack = scene.rig().parts().get(on.get());
+    if (jack == null && !on.get().equals("ring") && !on.get().equals("bench")) {
+      out.unknown("heater-lowers", h.name(), "no", h.name() + " stands on the " + on.get() + ", which is not described", List.of(on.get() + ".kind"));
+      return;
+    }
     if (jack == null || !jack.kind().equals("lab-jack")) {
       boolean ring = on.get().equals("ring");
       out.seen("heater-lowers", h.name(), ring ? "winding" : "no", h.name() + " stands on the " + on.get() + ", by the rig file", null, h.name() + ".stands-on");

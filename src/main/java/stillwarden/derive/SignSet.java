@@ -3,6 +3,7 @@ package stillwarden.derive;
 import java.time.Instant;
 import java.util.ArrayList;
 import java.util.Collection;
+import java.util.Collections;
 import java.util.List;
 import java.util.Map;
 import java.util.concurrent.ConcurrentHashMap;
@@ -20,8 +21,13 @@ final class SignSet {
     this.live = live;
   }
 
+  /** What was made so far; grows with it. */
   List<Sign> all() {
-    return List.copyOf(signs);
+    return Collections.unmodifiableList(signs);
+  }
+
+  void addAll(List<Sign> more) {
+    signs.addAll(more);
   }
 
   /** The values of a derived sign, from calm to worst. */

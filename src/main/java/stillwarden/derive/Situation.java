@@ -6,7 +6,6 @@ import java.time.ZoneOffset;
 import java.util.List;
 import java.util.Optional;
 import stillwarden.derive.physics.Numbers;
-import stillwarden.derive.physics.Physics;
 import stillwarden.describe.Entry;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Rig;
@@ -27,26 +26,31 @@ public record Situation(
   /** Before heat: what the rig file says. */
   public static Situation inspection(Rig rig, Policy policy, Optional<Instant> at, ZoneOffset offset) {
     // with no date in the file nothing dated is in force
-    return derive(rig, policy, List.of(), at.orElse(Instant.EPOCH), offset, false);
+    return derive(new Ground(rig, policy), List.of(), at.orElse(Instant.EPOCH), offset, false);
   }
 
   /** Mid-run: what the rig file says and what was seen and done up to {@code at}. */
   public static Situation run(Rig rig, Policy policy, List<Entry> lines, Instant at, ZoneOffset offset) {
-    return derive(rig, policy, lines, at, offset, true);
+    return run(new Ground(rig, policy), lines, at, offset);
   }
 
-  private static Situation derive(Rig rig, Policy policy, List<Entry> lines, Instant at, ZoneOffset offset, boolean withRun) {
+  /** The same for one of many moments of a run: what stands between them is kept in {@code ground}. */
+  public static Situation run(Ground ground, List<Entry> lines, Instant at, ZoneOffset offset) {
+    return derive(ground, lines, at, offset, true);
+  }
+
+  private static Situation derive(Ground ground, List<Entry> lines, Instant at, ZoneOffset offset, boolean withRun) {
+    Policy policy = ground.policy();
     Duration hold = Duration.ofMillis(Math.round(Limits.of(policy, "head-hold") * 1000));
     RunState run = lines.isEmpty() ? RunState.none(at, offset) : RunState.of(lines, at, hold);
-    Roles roles = Roles.of(rig);
-    Numbers numbers = Physics.numbers(rig, policy, run.entries(), at);
-    Figures figures = new Figures(rig, policy, roles, numbers, run);
+    Numbers numbers = ground.numbers(run.entries(), at);
+    Figures figures = new Figures(ground.rig(), policy, ground.roles(), numbers, run);
     Timeline time = Timeline.of(run, heatUpLow(numbers), Duration.ofMillis(Math.round(Limits.of(policy, "residual-boil-max") * 1000)),
         figures.coolingTime().orElse(Duration.ofMillis(Math.round(Limits.of(policy, "cooling-time-unknown") * 1000))));
-    Scene scene = new Scene(rig, policy, run, roles, figures, time, new Looks(run));
+    Scene scene = new Scene(ground, run, figures, time, new Looks(run));
     SignSet out = new SignSet(time.live());
     PathFinding path = signs(scene, out, withRun);
-    return new Situation(rig, policy, roles, run, time, out.all(), numbers, path, withRun);
+    return new Situation(ground.rig(), policy, ground.roles(), run, time, out.all(), numbers, path, withRun);
   }
 
   private static Duration heatUpLow(Numbers numbers) {
@@ -55,10 +59,7 @@ public record Situation(
   }
 
   private static PathFinding signs(Scene scene, SignSet out, boolean withRun) {
-    new RigSigns(scene, out).make();
-    SetupSigns setup = new SetupSigns(scene, out);
-    setup.make();
-    setup.ports();
+    out.addAll(scene.ground().block("set-up", RigSigns.madeFrom(scene), () -> setUp(scene)));
     new FigureSigns(scene, out).make();
     new HeatSigns(scene, out).make();
     PathFinding path = new PathSigns(scene, out).make();
@@ -78,6 +79,16 @@ public record Situation(
     new PeopleSigns(scene, out).make();
     overCheck(scene, out);
     return path;
+  }
+
+  /** What the rig file alone says, but for what {@link RigSigns#madeFrom} names. */
+  private static List<Sign> setUp(Scene scene) {
+    SignSet out = new SignSet(scene.live());
+    new RigSigns(scene, out).make();
+    SetupSigns setup = new SetupSigns(scene, out);
+    setup.make();
+    setup.ports();
+    return List.copyOf(out.all());
   }
 
   /** Any look that matters and is past its time: something of it stands counted or possible. */

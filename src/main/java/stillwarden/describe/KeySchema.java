@@ -91,7 +91,7 @@ final class KeySchema {
     Map<String, Object> out = new LinkedHashMap<>();
     out.put("type", "object");
     out.put("minProperties", 1);
-    out.put("propertyNames", listed(key.list(), pattern("\\S")));
+    out.put("propertyNames", pattern("\\S"));
     out.put("additionalProperties", quantity(Dimension.FRACTION, List.of("%")));
     return out;
   }

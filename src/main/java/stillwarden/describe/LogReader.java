@@ -30,6 +30,7 @@ public final class LogReader {
   private final List<RunLog.LeftOut> leftOut = new ArrayList<>();
   private final Set<String> ids = new LinkedHashSet<>();
   private int number;
+  private long bytes;
 
   public LogReader(String file) {
     this.file = file;
@@ -60,10 +61,28 @@ public final class LogReader {
     } catch (IOException e) {
       throw new Unusable(Spot.of(name), "could not be read");
     }
-    if (reader.entries.isEmpty()) {
-      throw reader.nothing();
+    return reader.usable();
+  }
+
+  /** What has been read so far, as {@link #log}. @throws Unusable when no line of it can be used */
+  public RunLog usable() throws Unusable {
+    if (entries.isEmpty()) {
+      throw nothing();
     }
-    return reader.log();
+    return log();
+  }
+
+  /**
+   * Takes more text of a growing log: whole lines, or the unfinished last one.
+   *
+   * @throws Unusable when a line names a log format that this program does not know, or the whole gets too large
+   */
+  public void add(byte[] text) throws Unusable {
+    bytes += text.length;
+    if (bytes > MOST_BYTES) {
+      throw Source.tooLarge(MOST_BYTES, Spot.of(file));
+    }
+    all(text);
   }
 
   private Unusable nothing() {

@@ -27,9 +27,10 @@ record Shares(Key key, String path, Defects defects) {
 
   private void share(Node.Field f, Map<String, Datum> out) {
     List<String> known = Values.listed(key.list());
-    if (!known.isEmpty() && !known.contains(f.key())) {
-      defects.add(f.spot(), Words.quote(f.key()) + " is not in the list of " + key.list() + Words.hint(f.key(), known)
-          + "; leave out what is not listed: the rest of the whole counts as unknown");
+    Optional<String> slip = known.contains(f.key()) ? Optional.empty() : known.stream().filter(k -> Words.distance(f.key(), k) == 1).findFirst();
+    if (slip.isPresent()) {
+      // one letter off is a slip; a name that is simply not listed counts as a constituent of unknown volatility
+      defects.add(f.spot(), Words.quote(f.key()) + " is not in the list of " + key.list() + "; nearest is " + Words.quote(slip.get()));
       return;
     }
     try {

@@ -35,9 +35,13 @@ final class Source {
   static byte[] capped(InputStream in, int mostBytes, Spot spot) throws IOException, Unusable {
     byte[] bytes = in.readNBytes(mostBytes + 1);
     if (bytes.length > mostBytes) {
-      throw new Unusable(spot, "is larger than " + mostBytes / 1024 + " KiB; no description of a rig or a run is");
+      throw tooLarge(mostBytes, spot);
     }
     return bytes;
+  }
+
+  static Unusable tooLarge(int mostBytes, Spot spot) {
+    return new Unusable(spot, "is larger than " + mostBytes / 1024 + " KiB; no description of a rig or a run is");
   }
 
   static String text(byte[] bytes, Spot spot) throws Unusable {

@@ -3,8 +3,9 @@ package stillwarden.describe;
 import java.time.DateTimeException;
 import java.time.LocalDate;
 import java.time.OffsetDateTime;
-import java.util.ArrayList;
 import java.util.List;
+import java.util.LinkedHashSet;
+import java.util.Set;
 import java.util.Optional;
 import java.util.regex.Pattern;
 
@@ -142,7 +143,16 @@ final class Values {
   }
 
   /** The names of the plant or substance list; empty when this build has none, and then nothing is checked. */
+  /** Ids of a list, and for substances the other names that they go by. */
   static List<String> listed(String section) {
-    return new ArrayList<>(Knowledge.section(section).fields().keySet());
+    Set<String> out = new LinkedHashSet<>();
+    Knowledge.section(section).fields().forEach((id, t) -> {
+      out.add(id);
+      if (section.equals("substances")) {
+        t.text("name").ifPresent(out::add);
+        out.addAll(t.words("also"));
+      }
+    });
+    return List.copyOf(out);
   }
 }

@@ -89,6 +89,11 @@ public record Finding(
     return new Finding(rule, hazard, standing, facts, bans, under, signal, urgency);
   }
 
+  /** The same said of the same signs with other evidence. */
+  Finding withFacts(List<Sign> others) {
+    return new Finding(rule, hazard, standing, List.copyOf(others), statements, under, signal, urgency);
+  }
+
   private Finding with(Statement s) {
     List<Statement> more = new ArrayList<>(statements);
     more.add(s);

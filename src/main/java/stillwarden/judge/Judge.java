@@ -1,7 +1,9 @@
 package stillwarden.judge;
 
+import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Collection;
+import java.util.Deque;
 import java.util.HashMap;
 import java.util.HashSet;
 import java.util.List;
@@ -14,27 +16,38 @@ import stillwarden.derive.Sign;
 
 /**
  * Judges signs by the rules. A judge may be kept for a live run: it then hands the engine only the signs that came or
- * went. Kept or fresh, the same signs give the same judgement. Not for several threads at once.
+ * went, and none at all when the rules can see no difference (see {@link Recall}). Kept or fresh, the same signs give
+ * the same judgement. Not for several threads at once.
  */
 public final class Judge implements AutoCloseable {
   // far above what any state fires; a loop among rules would stop here and be reported
   private static final int MOST_FIRINGS = 20_000;
+  // a live run is judged in two passes, the second with the set-up faults that the first found
+  private static final int PASSES = 2;
 
   private final RuleBase rules;
+  private final boolean recalls;
+  private final Deque<Recall> recalled = new ArrayDeque<>();
   private final Map<Sign, FactHandle> inside = new HashMap<>();
   private final Set<String> broken = new HashSet<>();
   private KieSession session;
 
-  private Judge(RuleBase rules) {
+  Judge(RuleBase rules, boolean recalls) {
     this.rules = rules;
+    this.recalls = recalls;
   }
 
   public static Judge forInspection() {
-    return new Judge(RuleBase.inspect());
+    return new Judge(RuleBase.inspect(), true);
   }
 
   public static Judge forRuns() {
-    return new Judge(RuleBase.all());
+    return new Judge(RuleBase.all(), true);
+  }
+
+  /** Asks the engine every time: to check the short cut against. */
+  public static Judge withoutShortCut() {
+    return new Judge(RuleBase.all(), false);
   }
 
   /** Number of compiled rules: a build that compiled none must be noticed. */
@@ -49,6 +62,33 @@ public final class Judge implements AutoCloseable {
   }
 
   public Judgement judge(Collection<Sign> signs) {
+    List<Sign> asked = List.copyOf(signs);
+    for (Recall r : recalled) {
+      if (r.covers(asked)) {
+        return r.judgement(asked);
+      }
+    }
+    List<Sign> bare = Recall.bare(asked);
+    Said said = ask(bare);
+    Recall now = new Recall(asked, bare, said.findings());
+    // what could not be judged is tried again the next time
+    if (recalls && said.notJudged().isEmpty()) {
+      keep(now);
+    }
+    return new Judgement(now.last().findings(), said.notJudged());
+  }
+
+  private void keep(Recall now) {
+    recalled.addFirst(now);
+    if (recalled.size() > PASSES) {
+      recalled.removeLast();
+    }
+  }
+
+  /** @param findings in terms of what the rules see of the signs */
+  private record Said(List<Finding> findings, List<String> notJudged) {}
+
+  private Said ask(List<Sign> signs) {
     broken.clear();
     try {
       update(signs);
@@ -59,11 +99,11 @@ public final class Judge implements AutoCloseable {
     }
   }
 
-  private Judgement rebuilt(Collection<Sign> signs, RuntimeException first) {
+  private Said rebuilt(List<Sign> signs, RuntimeException first) {
     RuntimeException last = first;
     for (int i = 0; i < 8; i++) {
       String name = ruleOf(last);
-      close();
+      drop();
       if (!broken.add(name)) {
         break;
       }
@@ -74,9 +114,9 @@ public final class Judge implements AutoCloseable {
         last = next;
       }
     }
-    close();
+    drop();
     broken.add(ruleOf(last));
-    return new Judgement(List.of(), List.copyOf(broken));
+    return new Said(List.of(), List.copyOf(broken));
   }
 
   private void update(Collection<Sign> signs) {
@@ -96,7 +136,7 @@ public final class Judge implements AutoCloseable {
     }
   }
 
-  private Judgement fire() {
+  private Said fire() {
     int fired = session.fireAllRules(this::mayFire, MOST_FIRINGS);
     List<String> notJudged = new ArrayList<>(broken);
     if (fired >= MOST_FIRINGS) {
@@ -106,7 +146,7 @@ public final class Judge implements AutoCloseable {
     for (Object o : session.getObjects(Finding.class::isInstance)) {
       findings.add((Finding) o);
     }
-    return new Judgement(findings, notJudged);
+    return new Said(findings, notJudged);
   }
 
   private boolean mayFire(Match match) {
@@ -124,6 +164,11 @@ public final class Judge implements AutoCloseable {
 
   @Override
   public void close() {
+    recalled.clear();
+    drop();
+  }
+
+  private void drop() {
     inside.clear();
     if (session != null) {
       session.dispose();

@@ -6,6 +6,7 @@ import java.time.ZoneOffset;
 import java.time.format.DateTimeParseException;
 import java.util.Comparator;
 import java.util.Optional;
+import stillwarden.derive.Ground;
 import stillwarden.derive.Situation;
 import stillwarden.describe.Entry;
 import stillwarden.describe.Policy;
@@ -23,14 +24,18 @@ public final class Advisor {
   /** @param at the moment of the inspection; else the rig's {@code seen.at}, else none: then nothing dated is in force */
   public static Advice inspect(Rig rig, Policy policy, Optional<OffsetDateTime> at) {
     Optional<OffsetDateTime> when = at.or(() -> rig.word("seen.at").flatMap(Advisor::time));
-    Situation s = Situation.inspection(rig, policy, when.map(OffsetDateTime::toInstant), when.map(OffsetDateTime::getOffset).orElse(ZoneOffset.UTC));
+    Policy inForce = policy.asOf(when.map(OffsetDateTime::toInstant));
+    Situation s = Situation.inspection(rig, inForce, when.map(OffsetDateTime::toInstant), when.map(OffsetDateTime::getOffset).orElse(ZoneOffset.UTC));
     Judgement j = Judge.once(Judge.forInspection(), s.signs());
     return new Answer(s, j, when, true).advice(java.util.List.of());
   }
 
   /** @param at the moment to judge; later lines are left out; else the latest time in the log */
   public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at) {
-    return advise(rig, policy, log, at, Judge.forRuns(), true);
+    try (Judge judge = Judge.forRuns()) {
+      Instant when = at.orElseGet(() -> latest(log)).toInstant();
+      return advise(new Ground(rig, policy.asOf(Optional.of(when))), log, at, judge);
+    }
   }
 
   /** The same without a cap on steps, bans and questions: for those who check, not for those who act. */
@@ -42,14 +47,11 @@ public final class Advisor {
     }
   }
 
-  /** With a judge that is kept for a live run: only the signs that came or went are handed to the engine. */
-  public static Advice advise(Rig rig, Policy policy, RunLog log, Optional<OffsetDateTime> at, Judge judge, boolean closeJudge) {
+  /** With what is kept for a live run: only the signs that came or went are handed to the engine. */
+  public static Advice advise(Ground ground, RunLog log, Optional<OffsetDateTime> at, Judge judge) {
     OffsetDateTime when = at.orElseGet(() -> latest(log));
-    Situation s = situation(rig, policy, log, when);
+    Situation s = Situation.run(ground, log.entries(), when.toInstant(), when.getOffset());
     Judgement j = judge.judge(SetupFaults.with(s, judge.judge(s.signs())));
-    if (closeJudge) {
-      judge.close();
-    }
     return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(log.leftOut());
   }
 
@@ -65,7 +67,7 @@ public final class Advisor {
 
   /** The facts of a run at one moment, for those who judge by other means (tests, audits). */
   public static Situation situation(Rig rig, Policy policy, RunLog log, OffsetDateTime when) {
-    return Situation.run(rig, policy, log.entries(), when.toInstant(), when.getOffset());
+    return Situation.run(rig, policy.asOf(Optional.of(when.toInstant())), log.entries(), when.toInstant(), when.getOffset());
   }
 
   private static OffsetDateTime latest(RunLog log) {

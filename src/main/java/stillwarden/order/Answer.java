@@ -66,14 +66,14 @@ final class Answer {
   Advice advice(List<RunLog.LeftOut> leftOut) {
     boolean setup = situation.time().stage().equals("setting-up");
     List<Finding> acted = findings.stream().filter(Finding::isActive).map(f -> setup || !Verdicts.gate(f) ? f : f.bansOnly()).toList();
-    Arrange arrange = new Arrange(s -> deadlines.secondsToHarm(s.reasons), s -> Walk.station(situation, s.part));
+    Arrange arrange = new Arrange(s -> deadlines.secondsToHarm(s.reasons), s -> setup ? Walk.first(situation, s.reasons) : Walk.station(situation, s.part), setup);
     Arrange.Plan plan = arrange.arrange(acted);
     List<Step> steps = new ArrayList<>(plan.steps());
     markDone(steps);
     boolean notJudged = !judgement.notJudged().isEmpty() || !plan.cycle().isEmpty();
     String verdict = leftOutMatters(leftOut, Verdicts.of(situation, findings, steps, notJudged));
     List<Advice.Action> actions = actions(steps);
-    List<Advice.Question> asked = new Questions(situation).of(findings, everything);
+    List<Advice.Question> asked = new Questions(situation).again(openLooks(leftOut)).of(findings, everything);
     List<Advice.Action> shown = everything ? actions : Cap.most(MOST_STEPS, actions, asked, awaited(plan.bans(), actions));
     Set<String> gate = gateItems(false);
     return new Advice(
@@ -95,9 +95,9 @@ final class Answer {
         Deference.words(situation, findings));
   }
 
-  private static Set<String> awaited(List<Arrange.Bar> bans, List<Advice.Action> actions) {
+  private static Set<String> awaited(List<Bans.Bar> bans, List<Advice.Action> actions) {
     Set<String> out = new TreeSet<>();
-    bans.stream().filter(b -> actions.stream().anyMatch(a -> a.act().equals(b.deed()))).forEach(b -> out.add(b.until()));
+    bans.stream().filter(b -> actions.stream().anyMatch(a -> a.act().equals(b.deed()))).forEach(b -> out.addAll(b.untils()));
     return out;
   }
 
@@ -123,6 +123,10 @@ final class Answer {
   private String leftOutMatters(List<RunLog.LeftOut> leftOut, String verdict) {
     boolean open = leftOut.stream().anyMatch(l -> !l.torn() && !lookedAtSince(l));
     return open && verdict.equals("carry-on") ? "adjust" : verdict;
+  }
+
+  private List<String> openLooks(List<RunLog.LeftOut> leftOut) {
+    return leftOut.stream().filter(l -> !l.torn() && !l.about().isEmpty() && !lookedAtSince(l)).map(RunLog.LeftOut::about).distinct().toList();
   }
 
   private boolean lookedAtSince(RunLog.LeftOut l) {
@@ -201,13 +205,16 @@ final class Answer {
     return "";
   }
 
-  private static String sourceWords(String id) {
-    return Knowledge.section("sources").get(id.split(" ", 2)[0]).text("short").orElse(id);
+  /** {@code NICKELS (Nickels, Analytical Chemistry, October 1949)}: the id, and who that is. */
+  private static String sourceWords(String cited) {
+    String id = cited.split(" ", 2)[0];
+    String who = Knowledge.section("sources").get(id).text("ref").orElse("").split("[:;(]", 2)[0].strip();
+    return who.isEmpty() ? cited : cited + " (" + who + ")";
   }
 
-  private List<Advice.Ban> bans(List<Arrange.Bar> bars) {
+  private List<Advice.Ban> bans(List<Bans.Bar> bars) {
     List<Advice.Ban> out = new ArrayList<>();
-    for (Arrange.Bar b : bars) {
+    for (Bans.Bar b : bars) {
       if ((everything || out.size() < MOST_BANS) && b.named()) {
         Set<String> why = new TreeSet<>();
         b.reasons().forEach(f -> why.add(f.rule()));
@@ -219,12 +226,6 @@ final class Answer {
 
   /** Everything that a set-up rule can look at on this rig; or of it what is unknown. */
   private Set<String> gateItems(boolean unknownOnly) {
-    Set<String> named = new TreeSet<>();
-    Knowledge.section("hazards").fields().forEach((id, t) -> {
-      if (t.text("urgency").filter("before-start"::equals).isPresent()) {
-        t.get("rules").items().forEach(r -> named.addAll(r.words("signs")));
-      }
-    });
     Set<String> unknown = new TreeSet<>();
     findings.stream().filter(f -> !f.isActive() && Verdicts.holdsStart(f))
         .forEach(f -> f.facts().stream().filter(x -> x.standing() == Standing.POSSIBLE).forEach(x -> unknown.add(x.about() + " " + x.part())));
@@ -232,7 +233,7 @@ final class Answer {
       return unknown;
     }
     Set<String> out = new TreeSet<>(unknown);
-    situation.signs().stream().filter(x -> x.isSeen() && named.contains(x.about())).forEach(x -> out.add(x.about() + " " + x.part()));
+    situation.signs().stream().filter(x -> x.isSeen() && Hazards.gateSigns().contains(x.about())).forEach(x -> out.add(x.about() + " " + x.part()));
     return out;
   }
 

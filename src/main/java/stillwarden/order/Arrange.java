@@ -9,7 +9,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
-import java.util.TreeSet;
 import java.util.function.ToDoubleFunction;
 import java.util.function.ToIntFunction;
 import stillwarden.judge.Finding;
@@ -26,99 +25,33 @@ final class Arrange {
    * @param bans deed to its ban, deadliest first
    * @param cycle deeds whose relations contradict each other: a defect of the rulebook, reported and broken by the ladder
    */
-  record Plan(List<Step> steps, List<Bar> bans, List<String> cycle) {}
-
-  /** A deed that must not be done, or not before something. */
-  record Bar(String deed, String until, boolean named, List<Finding> reasons) {
-    Signal signal() {
-      return reasons.stream().map(Hazards::signal).reduce(Signal.NOTICE, Signal::worse);
-    }
-
-    /** A plain ban is stronger than one with {@code until}; what a rule named is told, what only a group brought is not. */
-    Bar with(Bar other) {
-      String both = until.isEmpty() || other.until.isEmpty() ? "" : until;
-      return new Bar(deed, both, named || other.named, joined(reasons, other.reasons));
-    }
-  }
+  record Plan(List<Step> steps, List<Bans.Bar> bans, List<String> cycle) {}
 
   private final ToDoubleFunction<Step> timeToHarm;
   private final ToIntFunction<Step> walkRound;
 
-  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound) {
+  private final boolean walking;
+
+  /** @param walking an inspection: in walk-round order, for nothing is hot yet */
+  Arrange(ToDoubleFunction<Step> timeToHarm, ToIntFunction<Step> walkRound, boolean walking) {
     this.timeToHarm = timeToHarm;
     this.walkRound = walkRound;
+    this.walking = walking;
   }
 
   Plan arrange(List<Finding> active) {
     Map<String, Step> steps = merged(active);
-    replaceWeaker(steps);
-    Map<String, Bar> bars = bars(active);
-    barWaitingForTheImpossible(bars, steps.values());
-    bar(steps, bars);
-    Set<Edge> edges = edges(active, bars, steps.values());
+    Bans bans = Bans.of(active);
+    // first the bans: a barred deed must not take a weaker one with it; then again, for what waited for the weaker one
+    bans.waitForWhatIsPossible(steps.values());
+    bans.removeFrom(steps);
+    bans.replaced(replaceWeaker(steps));
+    bans.waitForWhatIsPossible(steps.values());
+    bans.removeFrom(steps);
+    Set<Edge> edges = edges(active, bans, steps.values());
     List<String> cycle = new ArrayList<>();
     List<Step> sorted = sort(steps.values(), edges, cycle);
-    return new Plan(placePeople(sorted, edges), deadliestFirst(bars.values()), cycle);
-  }
-
-  private static Map<String, Bar> bars(List<Finding> active) {
-    Map<String, Bar> out = new LinkedHashMap<>();
-    for (Finding f : active) {
-      for (Statement s : f.statements()) {
-        if (s instanceof Statement.Forbid ban) {
-          Deeds.group(ban.deed()).forEach(deed -> out.merge(deed, new Bar(deed, ban.until(), ban.deed().equals(deed), List.of(f)), Bar::with));
-        }
-      }
-    }
-    return out;
-  }
-
-  private static List<Bar> deadliestFirst(Collection<Bar> bars) {
-    List<String> deadliest = Deeds.group("@deadliest");
-    List<Bar> out = new ArrayList<>(bars);
-    out.sort(Comparator.comparing(Bar::signal).reversed()
-        .thenComparingInt(b -> deadliest.contains(b.deed()) ? deadliest.indexOf(b.deed()) : deadliest.size())
-        .thenComparing(Bar::deed));
-    return out;
-  }
-
-  /**
-   * A ban that waits for a deed which cannot be done here waits for what stands in for that deed; so the deed behind it is
-   * not lost: a refill behind a heater that cannot move waits until it is quiet, and a sash waits for nothing.
-   */
-  private static void barWaitingForTheImpossible(Map<String, Bar> bars, Collection<Step> steps) {
-    bars.values().removeIf(b -> inVain(b, bars, steps) && Deeds.ids().contains(b.deed()) && Deeds.of(b.deed()).neverLost());
-    bars.replaceAll((deed, bar) -> inVain(bar, bars, steps) ? waitingForAnother(bar, bars, steps) : bar);
-  }
-
-  private static boolean inVain(Bar bar, Map<String, Bar> bars, Collection<Step> steps) {
-    return Deeds.ids().contains(bar.until()) && !possible(bar.until(), bars, steps);
-  }
-
-  private static Bar waitingForAnother(Bar bar, Map<String, Bar> bars, Collection<Step> steps) {
-    return Deeds.of(bar.until()).orElse().stream().filter(d -> possible(d, bars, steps)).findFirst()
-        .map(d -> new Bar(bar.deed(), d, bar.named(), bar.reasons())).orElse(bar);
-  }
-
-  private static boolean possible(String deed, Map<String, Bar> bars, Collection<Step> steps) {
-    boolean never = bars.containsKey(deed) && bars.get(deed).until().isEmpty();
-    return !never && steps.stream().anyMatch(s -> s.id().equals(deed));
-  }
-
-  /** Until nothing more falls: a deed that waits for a barred one is barred too. */
-  private static void bar(Map<String, Step> steps, Map<String, Bar> bars) {
-    int before;
-    do {
-      before = steps.size();
-      List<Step> now = List.copyOf(steps.values());
-      steps.values().removeIf(s -> barred(s, bars, now));
-    } while (steps.size() < before);
-  }
-
-  private static List<Finding> joined(List<Finding> a, List<Finding> b) {
-    List<Finding> out = new ArrayList<>(a);
-    out.addAll(b);
-    return List.copyOf(out);
+    return new Plan(placePeople(sorted, edges), bans.deadliestFirst(), cycle);
   }
 
   private static Map<String, Step> merged(List<Finding> active) {
@@ -139,9 +72,9 @@ final class Arrange {
     return out;
   }
 
-  private static void replaceWeaker(Map<String, Step> steps) {
-    Set<String> present = new TreeSet<>();
-    steps.values().forEach(s -> present.add(s.id()));
+  /** @return each deed that fell, with the one it fell to */
+  private static Map<String, String> replaceWeaker(Map<String, Step> steps) {
+    Map<String, String> fell = new HashMap<>();
     for (Step strong : List.copyOf(steps.values())) {
       for (String weak : strong.deed.replaces()) {
         // what is itself replaced by something stronger still does its own replacing: the relation is transitive
@@ -149,55 +82,36 @@ final class Arrange {
           boolean falls = s.id().equals(weak) && s != strong;
           if (falls) {
             strong.reasons.addAll(s.reasons);
+            fell.put(weak, strong.id());
           }
           return falls;
         });
       }
     }
-  }
-
-  private static boolean barred(Step s, Map<String, Bar> bars, Collection<Step> all) {
-    Bar bar = bars.get(s.id());
-    if (bar == null) {
-      return false;
-    }
-    if (bar.until().isEmpty()) {
-      return true;
-    }
-    boolean action = Deeds.ids().contains(bar.until());
-    if (!action) {
-      s.iff = bar.until();
-      return false;
-    }
-    return all.stream().noneMatch(o -> o.id().equals(bar.until()));
+    return fell;
   }
 
   private record Edge(Step first, Step then) {}
 
-  private static Set<Edge> edges(List<Finding> active, Map<String, Bar> bars, Collection<Step> steps) {
+  private static Set<Edge> edges(List<Finding> active, Bans bans, Collection<Step> steps) {
     Set<Edge> out = new HashSet<>();
     boolean alarm = active.stream().anyMatch(f -> !Hazards.speaking(f).end() && !Hazards.of(f.hazard()).end() && cuts(f));
     for (Finding f : active) {
       // the leisurely order of a planned end gives way once a hazard asks for an energy cut
       boolean givesWay = alarm && Hazards.of(f.hazard()).end();
       for (Statement s : f.statements()) {
-        if (s instanceof Statement.Before b && !givesWay && !holdsUp(b, bars)) {
+        if (s instanceof Statement.Before b && !givesWay && !holdsUp(b, bans)) {
           link(steps, b.first(), b.then(), out);
         }
       }
     }
-    for (Bar bar : bars.values()) {
-      if (!bar.until().isEmpty()) {
-        link(steps, bar.until(), bar.deed(), out);
-      }
-    }
+    bans.all().forEach(bar -> bar.untils().forEach(until -> link(steps, until, bar.deed(), out)));
     return out;
   }
 
   /** What itself has to wait never holds back an energy cut. */
-  private static boolean holdsUp(Statement.Before b, Map<String, Bar> bars) {
-    boolean cut = Deeds.ids().contains(b.then()) && Deeds.of(b.then()).cut();
-    return cut && bars.containsKey(b.first()) && !bars.get(b.first()).until().isEmpty();
+  private static boolean holdsUp(Statement.Before b, Bans bans) {
+    return Deeds.ids().contains(b.then()) && Deeds.of(b.then()).cut() && bans.waits(b.first());
   }
 
   private static boolean cuts(Finding f) {
@@ -215,6 +129,14 @@ final class Arrange {
   }
 
   private Comparator<Step> byLadder() {
+    if (walking) {
+      return Comparator.<Step>comparingInt(s -> s.id().equals("do-not-start") ? 0 : 1)
+          .thenComparingInt(walkRound)
+          .thenComparingDouble(s -> s.deed.ladder())
+          .thenComparing(Step::id)
+          .thenComparing(s -> s.part)
+          .thenComparing(s -> s.variants.toString());
+    }
     return Comparator.<Step>comparingDouble(s -> s.iff.isEmpty() ? s.deed.ladder() : 8.5 + s.deed.ladder() / 100)
         .thenComparingDouble(timeToHarm)
         .thenComparingInt(walkRound)

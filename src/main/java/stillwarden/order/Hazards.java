@@ -1,8 +1,10 @@
 package stillwarden.order;
 
 import java.time.Duration;
+import java.util.HashSet;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.concurrent.ConcurrentHashMap;
 import stillwarden.describe.Knowledge;
 import stillwarden.describe.Tree;
@@ -33,6 +35,26 @@ final class Hazards {
 
   static Page of(String id) {
     return PAGES.computeIfAbsent(id, Hazards::read);
+  }
+
+  /** Every sign that a set-up rule looks at. */
+  static Set<String> gateSigns() {
+    return Gate.SIGNS;
+  }
+
+  /** Read when first asked for. */
+  private static final class Gate {
+    static final Set<String> SIGNS = read();
+
+    private static Set<String> read() {
+      Set<String> named = new HashSet<>();
+      Knowledge.section("hazards").fields().forEach((id, t) -> {
+        if (t.text("urgency").filter("before-start"::equals).isPresent()) {
+          t.get("rules").items().forEach(r -> named.addAll(r.words("signs")));
+        }
+      });
+      return Set.copyOf(named);
+    }
   }
 
   static boolean known(String id) {

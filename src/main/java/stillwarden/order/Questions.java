@@ -36,6 +36,12 @@ final class Questions {
     this.situation = situation;
   }
 
+  /** What a line that could not be read seems to have been about is looked at again. */
+  Questions again(List<String> abouts) {
+    abouts.stream().filter(a -> Knowledge.section("words").get("log").get("saw").has(a)).forEach(a -> asked.computeIfAbsent(a, k -> new Asked()));
+    return this;
+  }
+
   List<Advice.Question> of(List<Finding> findings, boolean all) {
     boolean setup = situation.time().stage().equals("setting-up");
     for (Finding f : findings) {
@@ -45,6 +51,10 @@ final class Questions {
       }
     }
     overdueLooks();
+    partsBeforeTheirKeys();
+    if (setup && situation.rig().method().isEmpty()) {
+      asked.computeIfAbsent("method", k -> new Asked()).grave.add("method");
+    }
     List<Map.Entry<String, Asked>> sorted = new ArrayList<>(asked.entrySet());
     sorted.sort(Comparator.<Map.Entry<String, Asked>>comparingInt(e -> e.getValue().grave.isEmpty() ? 1 : 0)
         .thenComparingInt(e -> -e.getValue().grave.size())
@@ -73,6 +83,19 @@ final class Questions {
 
   private static boolean setupGrave(Finding f) {
     return Hazards.signal(f) == Signal.DANGER;
+  }
+
+  /** Whether there is a part at all is asked before anything about it. */
+  private void partsBeforeTheirKeys() {
+    for (String about : List.copyOf(asked.keySet())) {
+      int dot = about.indexOf('.');
+      String part = dot < 0 ? "" : about.substring(0, dot);
+      Asked kind = asked.get(part + ".kind");
+      if (kind != null && !about.endsWith(".kind")) {
+        kind.grave.addAll(asked.get(about).grave);
+        kind.unlocks.addAll(asked.get(about).unlocks);
+      }
+    }
   }
 
   private void overdueLooks() {

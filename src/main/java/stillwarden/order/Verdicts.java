@@ -15,7 +15,8 @@ final class Verdicts {
 
   /** @param notJudged a rule threw: never calm then */
   static String of(Situation s, List<Finding> findings, List<Step> steps, boolean notJudged) {
-    return s.time().stage().equals("setting-up") ? beforeHeat(findings, notJudged) : inRun(s, findings, steps, notJudged);
+    boolean noMethod = s.rig().method().isEmpty();
+    return s.time().stage().equals("setting-up") ? beforeHeat(findings, notJudged || noMethod) : inRun(s, findings, steps, notJudged);
   }
 
   private static String beforeHeat(List<Finding> findings, boolean notJudged) {

@@ -11,6 +11,7 @@ import stillwarden.derive.RigNames;
 import stillwarden.derive.Situation;
 import stillwarden.describe.Joint;
 import stillwarden.describe.Knowledge;
+import stillwarden.judge.Finding;
 
 /** The walk round the bench: where each question stands on it, and how a rig path reads by role. */
 final class Walk {
@@ -42,12 +43,19 @@ final class Walk {
     if (dot < 0) {
       return about;
     }
-    return RigNames.role(s.rig(), s.roles(), about.substring(0, dot)).map(r -> r + about.substring(dot)).orElse(about);
+    String key = about.substring(dot);
+    // a bare role asks whether there is such a part
+    return RigNames.role(s.rig(), s.roles(), about.substring(0, dot)).map(r -> key.equals(".kind") ? r : r + key).orElse(about);
   }
 
   static int place(Situation s, String about) {
     Integer exact = PLACES.get(byRole(s, about));
     return exact != null ? exact * 100 + index(about) : 9_999_999;
+  }
+
+  /** Where on the walk round the first of the things behind these findings stands. */
+  static int first(Situation s, List<Finding> reasons) {
+    return reasons.stream().flatMap(f -> f.facts().stream()).flatMap(x -> x.looks().stream()).mapToInt(l -> place(s, l)).min().orElse(Integer.MAX_VALUE);
   }
 
   private static int index(String about) {

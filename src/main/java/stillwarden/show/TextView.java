@@ -62,11 +62,15 @@ public final class TextView {
 
   private String firstThing() {
     // in set-up the verdict itself says "not yet": what comes first is the first thing that would change it
-    Optional<Advice.Action> first = advice.actions().stream().filter(a -> !a.act().equals("do-not-start")).findFirst();
+    Optional<Advice.Action> first = advice.actions().stream().filter(this::changesIt).findFirst();
     if (first.isPresent()) {
       return conditional(first.get());
     }
     return advice.ask().isEmpty() ? "nothing is due." : advice.ask().get(0).say();
+  }
+
+  private boolean changesIt(Advice.Action a) {
+    return !a.act().equals("do-not-start") && !(advice.verdict().equals("not-yet") && a.signal().equals("NOTICE"));
   }
 
   private String subline() {
@@ -114,7 +118,7 @@ public final class TextView {
   private void reason(Advice.Because b, String orders) {
     page.item("  - ", "(" + orders + ") " + b.rule() + " [" + b.hazard() + "]");
     b.facts().forEach(f -> page.item("      ", f));
-    page.item("      ", "source: " + b.source());
+    page.item("      ", "source: " + b.source().replaceAll(" \\([^)]*\\)", ""));
   }
 
   private void sources() {

@@ -1,6 +1,8 @@
 package stillwarden.cli;
 
 import java.io.BufferedReader;
+import java.io.ByteArrayInputStream;
+import java.io.ByteArrayOutputStream;
 import java.io.InputStream;
 import java.io.InputStreamReader;
 import java.nio.charset.StandardCharsets;
@@ -84,6 +86,27 @@ final class FakeEngine implements Engine {
   private static Advice advice(String rig, String verdict, Optional<OffsetDateTime> at) {
     return new Advice(rig, at.map(OffsetDateTime::toString).orElse(""), "running", verdict, List.of(), 0, List.of(), List.of(), List.of(),
         List.of(), List.of(), List.of(), 41, 41, List.of(), "The site decides.");
+  }
+
+  @Override
+  public Live live(Rig rig, Policy policy, String name) {
+    ByteArrayOutputStream all = new ByteArrayOutputStream();
+    return new Live() {
+      @Override
+      public void hear(byte[] text) {
+        all.writeBytes(text);
+      }
+
+      @Override
+      public Advice answer(Optional<OffsetDateTime> at) throws Unusable {
+        return advise(rig, policy, log(new ByteArrayInputStream(all.toByteArray()), name), at);
+      }
+
+      @Override
+      public void close() {
+        all.reset();
+      }
+    };
   }
 
   @Override

@@ -166,7 +166,7 @@ final class PathOracle {
       receivers(said);
     }
     if (said.isEmpty()) {
-      return rig.nothingElse() ? State.OPEN : State.UNKNOWN;
+      return rig.nothingElse() && !(is(part, "vacuum") && port.port().equals("side-arm")) ? State.OPEN : State.UNKNOWN;
     }
     boolean closed = said.contains("stoppered") || said.contains("capped");
     return closed ? State.CLOSED : said.contains("unknown") ? State.UNKNOWN : State.OPEN;

@@ -30,7 +30,7 @@ class VocabularyTest {
     });
     words.jointKeys().keySet().forEach(k -> out.add("joint." + k));
     words.observations().values().stream().filter(o -> !o.later()).forEach(o -> out.add(o.id()));
-    out.addAll(List.of("method", "openings"));
+    out.addAll(List.of("method", "openings", "joints"));
     return out;
   }
 

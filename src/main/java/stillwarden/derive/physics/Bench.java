@@ -37,10 +37,14 @@ final class Bench {
   final List<String> notes = new ArrayList<>();
 
   Bench(Rig rig, Policy policy, List<Entry> entries, Instant at) {
+    this(rig, policy, RunState.of(entries, at));
+  }
+
+  Bench(Rig rig, Policy policy, RunState run) {
     this.rig = rig;
     this.parts = RigParts.of(rig);
     this.policy = policy;
-    this.run = RunState.of(entries, at);
+    this.run = run;
     this.atmosphere = run.barometer().isPresent()
         ? Atmosphere.of(run.barometer(), rig.word("place.barometer-is"), rig.si("place.elevation"))
         : Atmosphere.of(rig);

@@ -2,6 +2,7 @@ package stillwarden.derive.physics;
 
 import java.util.List;
 import java.util.Map;
+import java.util.concurrent.ConcurrentHashMap;
 import stillwarden.describe.Knowledge;
 import stillwarden.describe.Policy;
 import stillwarden.describe.Tree;
@@ -18,11 +19,15 @@ final class Limits {
       Map.entry("L/kg", new double[] {1e-3, 0}), Map.entry("J/(kg.K)", new double[] {1, 0}), Map.entry("W/(m2.K)", new double[] {1, 0}),
       Map.entry("Pa.s", new double[] {1, 0}));
 
+  /** Read once: a moment of a run asks for some hundreds of them. */
+  private static final Map<String, Band> READ = new ConcurrentHashMap<>();
+
   private Limits() {}
 
   /** The band under a key of {@code rules/limits}. */
   static Band band(String key) {
-    return read(Knowledge.section("limits").get(key), "rules/limits: `" + key + "`");
+    Band read = READ.get(key);
+    return read != null ? read : READ.computeIfAbsent(key, k -> read(Knowledge.section("limits").get(k), "rules/limits: `" + k + "`"));
   }
 
   static double value(String key) {

@@ -12,7 +12,26 @@ import stillwarden.describe.Rig;
 
 /** The computation: every number of the contract for a rig, its site's policy and the run so far. */
 public final class Physics {
-  private Physics() {}
+  private final Rig rig;
+  private final Policy policy;
+  private RunState lastRun;
+  private Numbers lastNumbers;
+
+  /** For many moments of one run: a line that tells the computation nothing new costs no computation. */
+  public Physics(Rig rig, Policy policy) {
+    this.rig = rig;
+    this.policy = policy;
+  }
+
+  /** As {@link #numbers(Rig, Policy, List, Instant)}. */
+  public Numbers numbers(List<Entry> entries, Instant at) {
+    RunState run = RunState.of(entries, at);
+    if (!run.equals(lastRun)) {
+      lastNumbers = of(new Bench(rig, policy, run)).numbers();
+      lastRun = run;
+    }
+    return lastNumbers;
+  }
 
   /**
    * @param entries usable log lines sorted by time with corrections applied; later ones than {@code at} are left out; empty before a run
