@@ -97,7 +97,7 @@ final class Answer {
 
   private static Set<String> awaited(List<Bans.Bar> bans, List<Advice.Action> actions) {
     Set<String> out = new TreeSet<>();
-    bans.stream().filter(b -> actions.stream().anyMatch(a -> a.act().equals(b.deed()))).forEach(b -> out.add(b.until()));
+    bans.stream().filter(b -> actions.stream().anyMatch(a -> a.act().equals(b.deed()))).forEach(b -> out.addAll(b.untils()));
     return out;
   }
 

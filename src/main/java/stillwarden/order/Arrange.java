@@ -187,7 +187,7 @@ final class Arrange {
     List<Step> rest = new ArrayList<>(sorted);
     rest.removeAll(aside);
     List<Step> equipment = rest.stream().filter(s -> s.deed.equipment()).toList();
-    if (aside.isEmpty() || equipment.isEmpty() || !firstMove(equipment.get(0))) {
+    if (aside.isEmpty() || equipment.isEmpty() || !(firstMove(equipment.get(0)) || equipment.get(0).reasons.stream().anyMatch(Hazards::stopClass))) {
       return sorted;
     }
     int keep = equipment.size() > 2 && equipment.get(2).id().equals("sash-down") ? 3 : Math.min(2, equipment.size());

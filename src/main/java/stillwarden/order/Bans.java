@@ -63,7 +63,10 @@ final class Bans {
     return bars.values();
   }
 
+<<<<<<< HEAD
   /** Banned until something else is done or seen. */
+=======
+>>>>>>> inter
   boolean waits(String deed) {
     return bars.containsKey(deed) && !bars.get(deed).plain();
   }
@@ -110,9 +113,10 @@ final class Bans {
     if (!Deeds.ids().contains(until) || possible(until, steps)) {
       return Optional.of(until);
     }
-    Optional<String> instead = Deeds.of(until).orElse().stream().filter(d -> possible(d, steps)).findFirst();
-    boolean neverLost = Deeds.ids().contains(deed) && Deeds.of(deed).neverLost();
-    return instead.isPresent() ? instead : neverLost ? Optional.empty() : Optional.of(until);
+    if (Deeds.ids().contains(deed) && Deeds.of(deed).neverLost()) {
+      return Optional.empty();
+    }
+    return Optional.of(Deeds.of(until).orElse().stream().filter(d -> possible(d, steps)).findFirst().orElse(until));
   }
 
   private boolean possible(String deed, Collection<Step> steps) {
