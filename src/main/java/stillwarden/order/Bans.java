@@ -63,10 +63,7 @@ final class Bans {
     return bars.values();
   }
 
-<<<<<<< HEAD
   /** Banned until something else is done or seen. */
-=======
->>>>>>> inter
   boolean waits(String deed) {
     return bars.containsKey(deed) && !bars.get(deed).plain();
   }
