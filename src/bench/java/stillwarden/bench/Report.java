@@ -76,7 +76,7 @@ public final class Report {
     head("Memory after collection, and collections (serial collector, 1 GB)");
     row("a live rig", "%.0f KB besides its log (goal 100), %.0f KB with a whole log of its own", rig, rig + lines);
     row("longest collection", "%.0f ms, with 1,000 rigs live", live.get("longest-collection-ms"));
-    bound("the engine's session for a rig, its signs and the last judgement");
+    bound("not broken down here: the engine's session, the signs with their evidence, the last two judgements, the last numbers");
   }
 
   private static void coldStart() throws IOException, InterruptedException {
@@ -89,7 +89,7 @@ public final class Report {
     row("a bare Java hello", "%.0f ms, %.0f ms", times.get(0).get(0), median(times.get(0)));
     row("stillwarden inspect", "%.0f ms, %.0f ms: %.1f and %.1f times (goal 3)", times.get(1).get(0), median(times.get(1)),
         times.get(1).get(0) / times.get(0).get(0), median(times.get(1)) / median(times.get(0)));
-    bound("the rule engine's own start: about 2.8 times for it alone");
+    bound("the start of the rule engine, of the readers and of the numbers, most of it in code not yet compiled by the JVM");
   }
 
   private static double median(List<Double> some) {

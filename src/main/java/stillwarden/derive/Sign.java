@@ -2,6 +2,7 @@ package stillwarden.derive;
 
 import java.time.Instant;
 import java.util.List;
+import java.util.Objects;
 
 /**
  * One small qualitative fact that rules can match: {@code flask-level is low}. An unknown is not one sign but
@@ -20,6 +21,19 @@ public record Sign(
 
   public Sign {
     looks = List.copyOf(looks);
+  }
+
+  /** By hand: compared and hashed all the time, and what the compiler writes for records is built anew at every start. */
+  @Override
+  public boolean equals(Object o) {
+    return this == o
+        || o instanceof Sign s && standing == s.standing && about.equals(s.about) && value.equals(s.value) && part.equals(s.part)
+            && evidence.equals(s.evidence) && Objects.equals(since, s.since) && looks.equals(s.looks);
+  }
+
+  @Override
+  public int hashCode() {
+    return ((about.hashCode() * 31 + part.hashCode()) * 31 + value.hashCode()) * 31 + evidence.hashCode();
   }
 
   /** Acted on: seen, or counted as worst. */

@@ -4,13 +4,9 @@ import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Collection;
 import java.util.Deque;
-import java.util.HashMap;
 import java.util.HashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.Set;
-import org.kie.api.runtime.KieSession;
-import org.kie.api.runtime.rule.FactHandle;
 import org.kie.api.runtime.rule.Match;
 import stillwarden.derive.Sign;
 
@@ -28,9 +24,8 @@ public final class Judge implements AutoCloseable {
   private final RuleBase rules;
   private final boolean recalls;
   private final Deque<Recall> recalled = new ArrayDeque<>();
-  private final Map<Sign, FactHandle> inside = new HashMap<>();
   private final Set<String> broken = new HashSet<>();
-  private KieSession session;
+  private Facts inside;
 
   Judge(RuleBase rules, boolean recalls) {
     this.rules = rules;
@@ -68,9 +63,8 @@ public final class Judge implements AutoCloseable {
         return r.judgement(asked);
       }
     }
-    List<Sign> bare = Recall.bare(asked);
-    Said said = ask(bare);
-    Recall now = new Recall(asked, bare, said.findings());
+    Said said = ask(asked);
+    Recall now = new Recall(asked, said.findings(), said.places());
     // what could not be judged is tried again the next time
     if (recalls && said.notJudged().isEmpty()) {
       keep(now);
@@ -85,8 +79,11 @@ public final class Judge implements AutoCloseable {
     }
   }
 
-  /** @param findings in terms of what the rules see of the signs */
-  private record Said(List<Finding> findings, List<String> notJudged) {}
+  /**
+   * @param findings in terms of what the rules see of the signs
+   * @param places of each finding's facts among the signs
+   */
+  private record Said(List<Finding> findings, int[][] places, List<String> notJudged) {}
 
   private Said ask(List<Sign> signs) {
     broken.clear();
@@ -116,37 +113,24 @@ public final class Judge implements AutoCloseable {
     }
     drop();
     broken.add(ruleOf(last));
-    return new Said(List.of(), List.copyOf(broken));
+    return new Said(List.of(), new int[0][], List.copyOf(broken));
   }
 
-  private void update(Collection<Sign> signs) {
-    if (session == null) {
-      session = rules.newSession();
+  private void update(List<Sign> signs) {
+    if (inside == null) {
+      inside = new Facts(rules.newSession());
     }
-    Set<Sign> wanted = new HashSet<>(signs);
-    inside.entrySet().removeIf(e -> {
-      if (wanted.contains(e.getKey())) {
-        return false;
-      }
-      session.delete(e.getValue());
-      return true;
-    });
-    for (Sign s : wanted) {
-      inside.computeIfAbsent(s, session::insert);
-    }
+    inside.update(signs);
   }
 
   private Said fire() {
-    int fired = session.fireAllRules(this::mayFire, MOST_FIRINGS);
+    int fired = inside.fire(this::mayFire, MOST_FIRINGS);
     List<String> notJudged = new ArrayList<>(broken);
     if (fired >= MOST_FIRINGS) {
       notJudged.add("rules that set each other off without end");
     }
-    List<Finding> findings = new ArrayList<>();
-    for (Object o : session.getObjects(Finding.class::isInstance)) {
-      findings.add((Finding) o);
-    }
-    return new Said(findings, notJudged);
+    List<Finding> findings = inside.findings();
+    return new Said(findings, findings.stream().map(inside::places).toArray(int[][]::new), notJudged);
   }
 
   private boolean mayFire(Match match) {
@@ -169,10 +153,9 @@ public final class Judge implements AutoCloseable {
   }
 
   private void drop() {
-    inside.clear();
-    if (session != null) {
-      session.dispose();
-      session = null;
+    if (inside != null) {
+      inside.dispose();
+      inside = null;
     }
   }
 }
