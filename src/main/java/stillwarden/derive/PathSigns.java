@@ -242,7 +242,10 @@ final class PathSigns {
   private void gone(boolean evident) {
     Optional<Instant> cut = scene.time().cut();
     Duration wait = scene.limitTime("pressure-wait-min");
-    boolean waited = cut.filter(c -> !c.plus(wait).isAfter(scene.at())).isPresent();
+    Duration still = scene.limitTime("quiet-time-min");
+    boolean lately = Stream.of("hiss", "joint-creeping").flatMap(id -> scene.run().saw(id).stream())
+        .anyMatch(e -> e.text().equals("yes") && scene.run().age(e).compareTo(still) < 0);
+    boolean waited = !lately && cut.filter(c -> !c.plus(wait).isAfter(scene.at())).isPresent();
     boolean cool = scene.run().lastSaw("flask-temperature").flatMap(Entry::measured)
         .flatMap(q -> scene.number("water-boiling-point-here").map(bp -> q.si() - 273.15 <= bp.low() - scene.limit("quiet-below-boiling-min"))).orElse(true);
     if (waited && cool && !evident) {

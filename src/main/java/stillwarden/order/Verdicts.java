@@ -37,7 +37,7 @@ final class Verdicts {
   private static String inRun(Situation s, List<Finding> findings, List<Step> steps, boolean notJudged) {
     List<Finding> active = findings.stream().filter(Finding::isActive).toList();
     boolean danger = active.stream().anyMatch(f -> Hazards.signal(f) == Signal.DANGER && !gate(f));
-    boolean cut = steps.stream().filter(x -> x.deed.cut() && x.iff.isEmpty()).anyMatch(x -> x.reasons.stream().anyMatch(Verdicts::alarm));
+    boolean cut = steps.stream().filter(x -> x.deed.cut() && x.iff.isEmpty()).anyMatch(x -> x.reasons.stream().anyMatch(f -> alarm(f) && asksForACut(f)));
     if (danger || cut || notJudged || s.time().uncleared() || active.stream().anyMatch(f -> reaches(f, FORCED))) {
       return "stop";
     }
@@ -52,6 +52,11 @@ final class Verdicts {
   /** A hazard, not an end criterion, asks. */
   private static boolean alarm(Finding f) {
     return !Hazards.speaking(f).end() && !Hazards.of(f.hazard()).end();
+  }
+
+  /** Not merely merged into the cut because a weaker deed of its own fell to it. */
+  private static boolean asksForACut(Finding f) {
+    return f.statements().stream().anyMatch(x -> x instanceof Statement.Propose p && Deeds.of(p.action()).cut());
   }
 
   private static boolean reaches(Finding f, Set<String> criteria) {

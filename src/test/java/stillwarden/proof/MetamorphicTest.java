@@ -280,7 +280,8 @@ class MetamorphicTest {
       assertThat(shown.doNot()).hasSizeLessThanOrEqualTo(7);
     }
     assertThat(shown.actions().size() + shown.more()).isEqualTo(whole.actions().size());
-    assertThat(Runs.ids(shown)).isEqualTo(Runs.ids(whole).subList(0, shown.actions().size()));
+    // the cap leaves out what can wait, never turns anything round
+    assertThat(Runs.ids(whole)).containsSubsequence(Runs.ids(shown));
     assertThat(shown.actions()).allMatch(a -> !a.because().isEmpty() && a.because().stream().noneMatch(b -> b.facts().isEmpty() || b.source().isEmpty()));
     assertThat(json).doesNotContainPattern("(?i)\\bsafe\\b").doesNotContain("NaN");
     if (whole.actions().stream().anyMatch(a -> a.signal().equals("DANGER"))) {
