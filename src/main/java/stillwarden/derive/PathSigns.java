@@ -141,6 +141,8 @@ final class PathSigns {
       beforeHeat(graph);
     } else if (pathLook.word().filter("closed"::equals).isPresent()) {
       out.seen("path", "", "closed", scene.told(last.get()), last.get().at(), "path");
+    } else if (solid().isPresent() && flow.value().equals("none")) {
+      out.seen("path", "", "closed", scene.told(solid().get()) + ", and nothing comes over: counts as plugged", closedSince(), "path");
     } else if (graph.path() == PathFinding.State.CLOSED && !(pathLook.fresh() && last.isPresent() && plugless())) {
       out.seen("path", "", "closed", closures(graph), closedSince(), "path");
     } else if (pathLook.fresh() && (last.isPresent() || graph.path() == PathFinding.State.OPEN)) {
@@ -148,6 +150,11 @@ final class PathSigns {
     } else {
       unseen(flow, last.map(scene::told).orElse("nobody has looked along the path since heat came on"));
     }
+  }
+
+  /** Solid that was the last thing seen in the condenser. */
+  private Optional<Entry> solid() {
+    return scene.run().lastSaw("condenser-solids").filter(e -> Set.of("film", "growing", "blocking").contains(e.text()));
   }
 
   private void unseen(Flow flow, String old) {

@@ -65,8 +65,8 @@ public record Situation(
     PathFinding path = new PathSigns(scene, out).make();
     boolean run = withRun && scene.time().heatOn().isPresent();
     new SetupExtras(scene, out).make();
-    new TipSigns(scene, out).make();
     new CondenserSigns(scene, out).make(run);
+    new TipSigns(scene, out).make();
     if (run) {
       new WaterSigns(scene, out).make();
       new TemperatureSigns(scene, out).make();

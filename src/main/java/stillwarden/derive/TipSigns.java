@@ -86,6 +86,11 @@ final class TipSigns {
     Optional<Entry> why = vapour.or(() -> hot);
     if (why.isPresent()) {
       out.seen("receiver-in-vapour", "", "yes", scene.told(why.get()), why.get().at(), "vapour-past-condenser");
+      return;
+    }
+    Optional<Sign> unseen = out.all().stream().filter(x -> x.about().equals("vapour-out") && x.isActive() && !x.value().equals("none")).findFirst();
+    if (unseen.isPresent()) {
+      out.counted("receiver-in-vapour", "yes", unseen.get().evidence(), "vapour-past-condenser");
     } else {
       out.seen("receiver-in-vapour", "no", "nobody has seen vapour or hot liquid at the receiver");
     }

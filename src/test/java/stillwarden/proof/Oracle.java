@@ -172,7 +172,9 @@ final class Oracle {
   /** Whatever the tip does: stored heat does not wait until it is quiet, since it is what keeps it from being quiet. */
   private void heatDoesNotWait() {
     boolean until = bars.stream().anyMatch(b -> b.deed().equals("lower-heat") && WAITS.contains(b.until()));
-    if (s.live() && !until) {
+    // open: a leak outside wants the water shut before the heater moves, one inside wants it to run until quiet
+    boolean twoLeaks = s.is("inner-leak", "yes") && s.is("coolant-leak", "yes");
+    if (s.live() && !until && !twoLeaks) {
       require(!behindAWait("lower-heat") || !ids.contains("lower-heat") || s.is("attendance", "nobody"), "INV-06 lower-heat behind the wait for quiet");
     }
   }
@@ -245,7 +247,9 @@ final class Oracle {
   /** INV-16. */
   private void peopleFirst() {
     if (hurt() && s.is("glass-hot", "yes") && !steps.isEmpty()) {
-      require(!ids.isEmpty() && (PERSONAL.contains(ids.get(0)) || CUTS.contains(ids.get(0))), "INV-16 first is " + (ids.isEmpty() ? "nothing" : ids.get(0)));
+      // heat left off is no deed; flames go out first where what burns is already in the air, whoever is hurt beside them
+      boolean first = !ids.isEmpty() && (PERSONAL.contains(ids.get(0)) || CUTS.contains(ids.get(0)) || Set.of("keep-heat-off", "flame-out").contains(ids.get(0)));
+      require(first, "INV-16 first is " + (ids.isEmpty() ? "nothing" : ids.get(0)));
       for (String deed : equipment) {
         boolean onTheWay = CUTS.contains(deed) || deed.equals("flame-out") || deed.equals("sash-down") || NO_DEED.contains(deed);
         require(onTheWay || COLD.contains(deed), "INV-16 " + deed + " sends a hurt person back");

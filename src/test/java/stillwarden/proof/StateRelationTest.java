@@ -22,6 +22,7 @@ class StateRelationTest {
   private static final long SEED = Long.getLong("proof.seed", 20260512L);
   private static final int STATES = Integer.getInteger("proof.pairs", 12_000);
   private static final Set<String> CUTS = Set.of("cut-power", "isolate-remote", "isolate-auto", "close-gas");
+  private static final Set<String> PRINCIPLES = Rulebook.read().pages().stream().filter(Rulebook.Page::principle).map(Rulebook.Page::id).collect(java.util.stream.Collectors.toSet());
   private static final StateSpace SPACE = new StateSpace(Rulebook.read());
 
   /** Alarms that come beside others and change nothing about what was seen so far. */
@@ -84,9 +85,9 @@ class StateRelationTest {
     }
   }
 
-  /** Correction 25 (flames where flammable vapour is out), 14 (a load before a walk), and the tip once the mains are gone anyway. */
+  /** Correction 25 (flames where flammable vapour is out), 14 (a load before a walk), and the tip once the mains are gone anyway, heat left off. */
   private static boolean mayPrecede(Plan plan, int cut) {
-    return plan.ids().stream().filter(Arranged::equipment).limit(cut).allMatch(Set.of("flame-out", "support-load", "lower-receiver")::contains);
+    return plan.ids().stream().filter(Arranged::equipment).limit(cut).allMatch(Set.of("flame-out", "support-load", "lower-receiver", "keep-heat-off")::contains);
   }
 
   /** How many equipment steps stand ahead of the energy cut; -1 without one. */
@@ -114,13 +115,15 @@ class StateRelationTest {
       for (int i = 0; i < STATES; i++) {
         s = SPACE.step(s, r);
         List<Finding> all = active(judge, s);
-        List<Finding> grave = all.stream().filter(f -> !Arranged.signal(f).equals("NOTICE")).toList();
+        // a principle speaks of another's advice and has no weight of its own
+        List<Finding> grave = all.stream().filter(f -> !Arranged.signal(f).equals("NOTICE") || PRINCIPLES.contains(f.hazard())).toList();
         Plan with = Arranged.of(all, false);
         Plan without = Arranged.of(grave, false);
         List<String> a = graver(with);
         List<String> b = graver(without);
         if (!a.equals(b)) {
-          problem("a notice moves a graver step", s.odd() + " " + b + " becomes " + a);
+          List<String> notices = all.stream().filter(f -> !grave.contains(f)).map(f -> f.hazard() + "/" + f.rule()).toList();
+          problem("a notice moves a graver step", s.odd() + " " + b + " becomes " + a + " with " + notices + " " + without.ids() + " to " + with.ids());
         }
       }
     }
@@ -145,7 +148,9 @@ class StateRelationTest {
         for (Finding f : all) {
           // a principle that modifies another's advice leaves the deeds to it
           boolean proposes = f.under().isEmpty() && f.statements().stream().anyMatch(x -> x instanceof Statement.Propose);
-          if (Arranged.signal(f).equals("DANGER") && proposes && (setup || !Arranged.gate(f)) && plan.steps().stream().noneMatch(x -> x.reasons().contains(f))) {
+          // where everyone has to leave, leaving is the deed for all of them
+          boolean leave = plan.ids().contains("evacuate");
+          if (!leave && Arranged.signal(f).equals("DANGER") && proposes && (setup || !Arranged.gate(f)) && plan.steps().stream().noneMatch(x -> x.reasons().contains(f))) {
             problem("nothing left for " + f.hazard() + ": " + f.rule(), s.odd() + " " + plan.ids());
           }
         }

@@ -224,7 +224,7 @@ final class StateSpace {
         s.possible("vapour-out");
       }
     }
-    boolean there = s.seenAs("vapour-out", "wisps", "plume") || vapour && r.nextDouble() < odd / 6;
+    boolean there = s.is("vapour-out", "wisps", "plume") || vapour && r.nextDouble() < odd / 6;
     s.seen("receiver-in-vapour", there ? "yes" : "no");
   }
 
@@ -293,7 +293,8 @@ final class StateSpace {
     if (s.is("coolant", "running", "low") && s.is("jacket", "empty-hot", "empty-cool")) {
       s.seen("jacket", "full-cool");
     }
-    if (s.is("receiver-closes-vent", "yes")) {
+    boolean plug = s.is("vapour", "yes") && s.is("flow", "none") && s.is("crystals", "film", "growing", "blocking");
+    if (plug || s.is("receiver-closes-vent", "yes")) {
       s.seen("path", "closed");
       s.seen("level-and-path", "in-doubt");
     }
