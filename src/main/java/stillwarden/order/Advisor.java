@@ -53,7 +53,7 @@ public final class Advisor {
     OffsetDateTime when = at.orElseGet(() -> latest(log));
     Situation s = Situation.run(ground, log.entries(), when.toInstant(), when.getOffset());
     Judgement j = judge.judge(SetupFaults.with(s, judge.judge(s.signs())));
-    return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(until(log.leftOut(), when));
+    return new Answer(s, j, Optional.of(when), s.time().stage().equals("setting-up")).advice(at.isPresent() ? until(log.leftOut(), when) : log.leftOut());
   }
 
   /** Why the rules of one hazard spoke or kept quiet. */
@@ -71,7 +71,7 @@ public final class Advisor {
     return Situation.run(rig, policy.asOf(Optional.of(when.toInstant())), log.entries(), when.toInstant(), when.getOffset());
   }
 
-  /** Lines of a later moment are not yet there. */
+  /** Lines of a moment later than the one asked about are not yet there. */
   private static List<RunLog.LeftOut> until(List<RunLog.LeftOut> leftOut, OffsetDateTime when) {
     return leftOut.stream().filter(l -> time(l.at()).filter(t -> t.isAfter(when)).isEmpty()).toList();
   }

@@ -70,7 +70,10 @@ public final class TextView {
     if (first.isPresent()) {
       return conditional(first.get());
     }
-    return advice.ask().isEmpty() ? "nothing is due." : advice.ask().get(0).say();
+    if (!advice.ask().isEmpty()) {
+      return advice.ask().get(0).say();
+    }
+    return advice.leftOut().isEmpty() ? "nothing is due." : "look again and log it: a line of the log could not be used.";
   }
 
   private static Optional<Advice.Action> gravest(List<Advice.Action> due) {
