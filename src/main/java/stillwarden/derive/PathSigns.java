@@ -84,7 +84,7 @@ final class PathSigns {
     Optional<String> value = lastFlow.map(this::flowWord);
     // a drip seen to have stopped stands until it is seen again; a drip seen running does not
     if (value.isPresent() && (sure || !FLOWS.contains(value.get()))) {
-      boolean expected = scene.time().vapour(scene.at()) && !boiledDry();
+      boolean expected = scene.time().vapour(scene.at()) && (!boiledDry() || solid().isPresent());
       if (!value.get().equals("none") || expected) {
         out.seen("flow", "", value.get(), scene.told(lastFlow.get()), lastFlow.get().at(), "drip");
       }
@@ -141,6 +141,8 @@ final class PathSigns {
       beforeHeat(graph);
     } else if (pathLook.word().filter("closed"::equals).isPresent()) {
       out.seen("path", "", "closed", scene.told(last.get()), last.get().at(), "path");
+    } else if (pressed().isPresent()) {
+      out.seen("path", "", "closed", scene.told(pressed().get()) + ": no way out that is wide enough", pressed().get().at(), "path");
     } else if (solid().isPresent() && flow.value().equals("none")) {
       out.seen("path", "", "closed", scene.told(solid().get()) + ", and nothing comes over: counts as plugged", closedSince(), "path");
     } else if (graph.path() == PathFinding.State.CLOSED && !(pathLook.fresh() && last.isPresent() && plugless())) {
@@ -150,6 +152,12 @@ final class PathSigns {
     } else {
       unseen(flow, last.map(scene::told).orElse("nobody has looked along the path since heat came on"));
     }
+  }
+
+  /** A gauge above what an open rig shows, or a joint on the move, says more than a look along the glass. */
+  private Optional<Entry> pressed() {
+    Optional<Entry> gauge = scene.run().lastSaw("pressure").filter(e -> e.measured().filter(q -> q.si() >= 1000 * scene.limit("gauge-open-max")).isPresent());
+    return gauge.or(() -> scene.run().lastSaw("joint-creeping").filter(e -> e.text().equals("yes")));
   }
 
   /** Solid that was the last thing seen in the condenser. */
