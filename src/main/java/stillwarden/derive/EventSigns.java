@@ -57,6 +57,10 @@ final class EventSigns {
     }
     String value = e.measured().isPresent() && !values.contains(e.text()) ? (e.measured().get().si() > 0 ? "yes" : "no") : e.text();
     out.seen(o.id(), e.part(), value, scene.told(e), since(o, e), o.id());
+    if (o.id().equals("smell") && value.equals("burnt")) {
+      // what is burning is taken to be the charge until somebody finds otherwise
+      out.seen("scorching", "", "smell", scene.told(e), since(o, e), "scorching");
+    }
   }
 
   /** A yes or no that nobody is sure of counts as the worse; of several words the one that the vocabulary names, else all are asked. */

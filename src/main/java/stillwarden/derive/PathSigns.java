@@ -84,7 +84,7 @@ final class PathSigns {
     Optional<String> value = lastFlow.map(this::flowWord);
     // a drip seen to have stopped stands until it is seen again; a drip seen running does not
     if (value.isPresent() && (sure || !FLOWS.contains(value.get()))) {
-      boolean expected = scene.time().vapour(scene.at()) && (!boiledDry() || solid().isPresent());
+      boolean expected = scene.time().vapour(scene.at()) && (!boiledDry() || plugSeen());
       if (!value.get().equals("none") || expected) {
         out.seen("flow", "", value.get(), scene.told(lastFlow.get()), lastFlow.get().at(), "drip");
       }
@@ -152,6 +152,11 @@ final class PathSigns {
     } else {
       unseen(flow, last.map(scene::told).orElse("nobody has looked along the path since heat came on"));
     }
+  }
+
+  /** Something that can close the bore has been seen: a dry flask is then no proof that the bore is free. */
+  private boolean plugSeen() {
+    return solid().isPresent() || scene.run().sawValue("foam", "at-head", "over") || scene.run().sawValue("plant-in-head", "yes", Looks.NOT_SURE);
   }
 
   /** A gauge above what an open rig shows, or a joint on the move, says more than a look along the glass. */
