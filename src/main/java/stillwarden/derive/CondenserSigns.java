@@ -53,7 +53,10 @@ final class CondenserSigns {
     }
     String takeOff = scene.numbers().freezesInTakeOff();
     if (takeOff.isEmpty()) {
-      out.possible("oil-freezes-in-take-off", "room temperature or oil not known", "place.room", "charge.plant");
+      // only what is missing is asked for
+      String oil = scene.rig().datum("charge.plant").isEmpty() ? "charge.plant" : "charge.oil.melting-point";
+      boolean room = scene.rig().datum("place.room").isPresent() || scene.run().lastSaw("room-temperature").isPresent();
+      out.possible("oil-freezes-in-take-off", room ? "what the oil freezes at is not known" : "room temperature not known", room ? oil : "place.room");
     } else {
       out.seen("oil-freezes-in-take-off", "", takeOff, scene.numbers().takeOffWhy(), null, "place.room");
     }

@@ -15,6 +15,7 @@ import stillwarden.judge.Finding;
 
 /** The walk round the bench: where each question stands on it, and how a rig path reads by role. */
 final class Walk {
+  private static final String OPENINGS = "openings.";
   private static final Pattern JOINT = Pattern.compile("joints\\[(\\d+)\\]\\.(.+)");
   private static final Map<String, Integer> PLACES = places();
 
@@ -71,6 +72,9 @@ final class Walk {
       int i = Integer.parseInt(m.group(1));
       Optional<Joint> j = s.rig().joints().stream().filter(x -> x.index() == i).findFirst();
       return j.map(x -> x + ": " + words).orElse(words);
+    }
+    if (about.startsWith(OPENINGS)) {
+      return Wording.english().question("openings").replace("This opening", "Opening " + about.substring(OPENINGS.length()));
     }
     int dot = about.indexOf('.');
     boolean part = dot > 0 && s.rig().parts().containsKey(about.substring(0, dot));

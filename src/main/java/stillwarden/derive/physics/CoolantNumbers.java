@@ -17,7 +17,7 @@ final class CoolantNumbers {
     freezing(freezing, out);
     if (freezing.highest().isEmpty()) {
       String reason = b.charge.oil().isEmpty() ? "the make-up of the oil is not known" : "melting points not known: " + String.join(", ", freezing.unknown());
-      String[] missing = {"charge.oil.makeup", "charge.oil.melting-point"};
+      String[] missing = b.charge.oil().isEmpty() ? new String[] {"charge.oil.makeup", "charge.oil.melting-point"} : new String[] {"charge.oil.melting-point"};
       out.absent("coolant-strategy", reason, missing);
       out.absent("coolant-temperature", reason, missing);
       out.absent("crystals-possible-from", reason, missing);
