@@ -80,7 +80,7 @@ class MetamorphicTest {
     return "`" + a.substring(Math.max(0, i - 60), Math.min(a.length(), i + 60)) + "` against `" + b.substring(Math.max(0, i - 10), Math.min(b.length(), i + 60)) + "`";
   }
 
-  /** M3 in a log, as correction 27 has it: a calm look that nobody is sure of, or that nobody made. */
+  /** M3 in a log: a calm look that nobody is sure of, or that nobody made. */
   @Test
   void lessKnownInTheLogIsNeverCalmer() throws Exception {
     Rig rig = Runs.good();

@@ -101,13 +101,13 @@ final class Oracle {
     return WAITS.stream().anyMatch(w -> ids.contains(w) && ids.indexOf(w) < at);
   }
 
-  /** INV-01, with the sash for the jack where the heater stays, pressure shows, poison or fire is out, nobody is there (corrections 3, 25). */
+  /** INV-01, with the sash for the jack where the heater stays, pressure shows, poison or fire is out, nobody is there. */
   private void energyFirst() {
     if (!s.live() || !s.is("path", "closed") || hurt() || s.is("attendance", "nobody")) {
       return;
     }
     List<String> left = new ArrayList<>(equipment);
-    // correction 25: flames first only when what can burn is out (on the hot heater too); 14: support before a walk to the switch
+    // flames first only when what can burn is out (on the hot heater too); support before a walk to the switch
     boolean canBurn = !s.is("vapour-out", "none") || s.is("heater-wet", "oil", "solvent");
     boolean walk = s.is("clamp-slipping", "yes") && s.is("switch", "out-of-reach");
     left.removeIf(d -> d.equals("flame-out") && (canBurn || s.is("heater-kind", "burner")) || d.equals("support-load") && walk);
@@ -116,7 +116,7 @@ final class Oracle {
     List<String> cuts = left.stream().limit(1).toList();
     left.removeAll(cuts);
     left.removeIf(d -> CUTS.contains(d) && s.is("heater-kind", "burner") || d.equals("support-load"));
-    // a flask that cracks wets its heater (correction 25: heater wet and live)
+    // a flask that cracks wets its heater: wet and live
     boolean sash = s.is("pressure-evident", "yes") || fire() || s.is("toxic-release", "yes") || s.is("heater-live-wet", "yes") || s.is("heater-lowers", "no")
         || s.is("heater-kind", "burner") || s.is("glass-failing", "yes") || bathWet();
     boolean either = s.is("heater-wet", "oil", "solvent");
@@ -128,7 +128,7 @@ final class Oracle {
     return s.is("bath-spitting", "yes") || s.is("heater-kind", "bath") && s.is("heater-wet", "water");
   }
 
-  /** INV-03; a receiver that stands free is no closure (corrections 14, 24) while no pressure shows. */
+  /** INV-03; a receiver that stands free is no closure while no pressure shows. */
   private void neverOpenUnderPressure() {
     boolean pressed = s.live() && !s.is("path", "open") || s.is("pressure-evident", "yes") && s.is("glass-hot", "yes");
     if (pressed && s.is("pressure-gone", "no")) {
@@ -145,7 +145,7 @@ final class Oracle {
       require(!ids.contains("feed-slow"), "INV-04 feed-slow into a hot dry flask");
     }
     if (s.is("glass-hot", "yes") && s.is("jacket", "empty-hot")) {
-      // tempered water onto a jacket that was held off by plan is what correction 24 ends with
+      // tempered water onto a jacket that was held off by plan is allowed
       for (String deed : List.of("coolant-start-slow", "coolant-raise", "coolant-keep")) {
         require(!ids.contains(deed) || behindAWait(deed) || deed.equals("coolant-keep") && s.is("coolant", "running", "low"), "INV-04 " + deed + " into a hot empty jacket");
       }
@@ -159,7 +159,7 @@ final class Oracle {
     }
   }
 
-  /** INV-06; correction 24 for vapour at the receiver, 29 for the urgent order. */
+  /** INV-06, with vapour at the receiver and the urgent order excepted. */
   private void tipBeforeCooling() {
     boolean excepted = fire() || hurt() || s.is("receiver-in-vapour", "yes") || s.is("toxic-release", "yes") || s.is("attendance", "nobody")
         || s.is("vapour-out", "wisps", "plume") || plugged() || ids.contains("evacuate") || s.is("tip-can-be-cleared", "no") || !s.is("tip-can-be-cleared", "yes");
@@ -179,7 +179,7 @@ final class Oracle {
     }
   }
 
-  /** Crystals and no drip are a plug, whatever the last look at the way said (correction 2). */
+  /** Crystals and no drip are a plug, whatever the last look at the way said. */
   private boolean plugged() {
     return s.is("crystals", "film", "growing", "blocking") && s.is("flow", "none", "slowing") || s.is("crystals", "blocking") || s.is("coolant-watch", "failed");
   }
@@ -191,7 +191,7 @@ final class Oracle {
     }
   }
 
-  /** INV-10; a restart never stands in an alarm list (correction 33). */
+  /** INV-10; a restart never stands in an alarm list. */
   private void heatIsNotRaised() {
     HEATS.forEach(deed -> require(!ids.contains(deed), "INV-10 " + deed));
   }
@@ -257,7 +257,7 @@ final class Oracle {
     }
   }
 
-  /** INV-17 as correction 26 has it. */
+  /** INV-17. */
   private void toxic() {
     if (s.is("toxic-release", "yes") && s.is("glass-hot", "yes")) {
       require(ids.contains("evacuate") && ids.contains("raise-alarm"), "INV-17 nobody is sent out");

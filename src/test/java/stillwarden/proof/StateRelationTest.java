@@ -85,7 +85,7 @@ class StateRelationTest {
     }
   }
 
-  /** Correction 25 (flames where flammable vapour is out), 14 (a load before a walk), and the tip once the mains are gone anyway, heat left off. */
+  /** Flames where flammable vapour is out, a load before a walk, the tip once the mains are gone anyway, heat left off. */
   private static boolean mayPrecede(Plan plan, int cut) {
     return plan.ids().stream().filter(Arranged::equipment).limit(cut).allMatch(Set.of("flame-out", "support-load", "lower-receiver", "keep-heat-off")::contains);
   }

@@ -37,7 +37,7 @@ class RulebookTest {
   private static final Set<String> STATEMENTS =
       Set.of("propose", "proposeOn", "proposeAs", "forbid", "forbidUntil", "before", "ask", "reach", "as", "modifying", "knowing", "of", "getRule", "getName", "part");
 
-  /** The hazards of the register that concern a run with water and plant boiling in the flask, and those that its corrections add. */
+  /** Every hazard that a run with water and plant boiling in the flask has to have a folder for. */
   private static final String REGISTER = """
       heat-not-removable heat-excess heat-stuck-on heat-direct-mains heat-mantle-mismatch heat-none boil-restart heat-wet-mantle heat-probe-out
       heat-oil-bath-water heat-left-on flask-low-wet flask-low-no-reserve flask-dry-hot flask-overfull flask-bumping flask-no-nucleation
