@@ -72,6 +72,8 @@ final class CondenserSigns {
     Optional<String> word = l.word();
     if (word.filter(w -> !w.equals("none")).isPresent() || word.isPresent() && l.fresh()) {
       out.seen("vapour-out", "", word.get(), scene.told(l.entry().get()), l.entry().get().at(), "vapour-past-condenser");
+      // a look that is only too old puts nobody to the flames before the switch
+      out.seenIf(!word.get().equals("none") && !word.get().equals(Looks.NOT_SURE), "vapour-seen-out", scene.told(l.entry().get()));
       return false;
     }
     if (!scene.time().vapour(scene.at())) {

@@ -19,7 +19,7 @@ final class StateSpace {
   /** Drawn first and together; where a rule asks for one of them, states are drawn until it holds. */
   private static final Set<String> CORE = Set.of(
       "stage", "live", "heat", "vapour", "glass-hot", "power", "stopped-uncleared", "end-decided", "path", "pressure-evident", "pressure-gone",
-      "last-opening", "reservoir-is-relief", "receiver-in-vapour", "vapour-out", "level-and-path", "flask-level", "heater-live-wet", "heater-wet",
+      "last-opening", "reservoir-is-relief", "receiver-in-vapour", "vapour-out", "vapour-seen-out", "level-and-path", "flask-level", "heater-live-wet", "heater-wet",
       "heater-proven-dead", "flow", "drip-overdue", "crystals", "coolant-watch", "toxic-release", "charge-toxic", "refill-in-time", "attendance",
       "setup-fault", "permits.fixed-heater", "heater-lowers", "heater-kind");
 
@@ -224,6 +224,7 @@ final class StateSpace {
         s.possible("vapour-out");
       }
     }
+    s.seen("vapour-seen-out", s.seenAs("vapour-out", "wisps", "plume") ? "yes" : "no");
     boolean there = s.is("vapour-out", "wisps", "plume") || vapour && r.nextDouble() < odd / 6;
     s.seen("receiver-in-vapour", there ? "yes" : "no");
   }
